@@ -1,0 +1,1 @@
+export type { CurrentSeries, FrequencyTable, LoopSeries, MutualSeries } from './table.ts';
