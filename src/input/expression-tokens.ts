@@ -1,0 +1,67 @@
+/**
+ * The first gate of an expression: only numbers, names and arithmetic signs pass, within bounds, and they are
+ * written anew with single spaces, so that the parser behind meets nothing but these.
+ */
+import { Fault } from './fault.ts';
+import { MAX_EXPRESSION_LENGTH, MAX_EXPRESSION_TOKENS, MAX_PARENTHESES } from './limits.ts';
+import { quote } from './quote.ts';
+
+const TOKEN = /\s+|(\d+\.?\d*(?:e[+-]?\d+)?|\.\d+(?:e[+-]?\d+)?)|([A-Za-z_]\w*)|([-+*/^(),])/iy;
+
+/** Names that the parser would take for its own operators or constants, with what is meant here. */
+const RENAMED: ReadonlyMap<string, string> = new Map([['in', 'inch']]);
+
+/** Words of the parser's language; never names or units of a file. */
+export const PARSER_WORDS: ReadonlySet<string> = new Set(
+  'mod to in and or xor not end true false null undefined NaN Infinity'.split(' '),
+);
+
+/** Identifiers of a `plainUnits` text. */
+export function identifiersOf(text: string): string[] {
+  return text.match(/[A-Za-z_]\w*/g) ?? [];
+}
+
+/** Tokens of a `plainUnits` text, joined by single spaces. Throws EXPRESSION, TOO_LARGE or RANGE. */
+export function safeExpression(text: string): string {
+  if (text.length > MAX_EXPRESSION_LENGTH) {
+    const most = `the most is ${MAX_EXPRESSION_LENGTH}; use let names`;
+    throw new Fault('TOO_LARGE', `an expression of ${text.length} characters, ${most}`);
+  }
+  const tokens: string[] = [];
+  let open = 0;
+  TOKEN.lastIndex = 0;
+  while (TOKEN.lastIndex < text.length) {
+    const at = TOKEN.lastIndex;
+    const match = TOKEN.exec(text);
+    if (match === null) {
+      throw new Fault(
+        'EXPRESSION',
+        `can not read ${quote(text)}: ${quote(text[at])} has no place in a quantity`,
+      );
+    }
+    const [, number, name, sign] = match;
+    if (sign === '(' && ++open > MAX_PARENTHESES) {
+      throw new Fault('TOO_LARGE', `more than ${MAX_PARENTHESES} open parentheses in an expression`);
+    }
+    if (sign === ')') open--;
+    if (name !== undefined && PARSER_WORDS.has(name) && !RENAMED.has(name)) {
+      const infinite = name === 'NaN' || name === 'Infinity';
+      const why = infinite
+        ? 'is not a finite number'
+        : `can not be read: ${quote(name)} has no place in a quantity`;
+      throw new Fault(infinite ? 'RANGE' : 'EXPRESSION', `${quote(text)} ${why}`);
+    }
+    const token = number ?? (name === undefined ? sign : (RENAMED.get(name) ?? name));
+    if (token !== undefined) tokens.push(token);
+    if (tokens.length > MAX_EXPRESSION_TOKENS) {
+      throw new Fault('TOO_LARGE', `an expression of over ${MAX_EXPRESSION_TOKENS} parts; use let names`);
+    }
+  }
+  return dropUnitOne(tokens).join(' ');
+}
+
+/** `0.0039 1/K` is how people write a reciprocal unit: the 1 after a number goes. */
+function dropUnitOne(tokens: readonly string[]): string[] {
+  const isNumber = (token: string | undefined) => token !== undefined && /^[\d.]/.test(token);
+  return tokens.filter((t, k) => !(t === '1' && isNumber(tokens[k - 1]) && tokens[k + 1] === '/'));
+}

@@ -1,0 +1,195 @@
+/** Wires of a file: size, metal, temperature, insulation. Where they stand is `placement.ts`. */
+import { parseWireSize } from '../model/index.ts';
+import type { Caution } from '../problem.ts';
+import { isLaterKey } from './later-keys.ts';
+import { MAX_WIRES } from './limits.ts';
+import { type Material, type Materials, readMaterialName, TEMPERATURE } from './materials.ts';
+import { readNames } from './names.ts';
+import { describeValue, quote, quoteList } from './quote.ts';
+import { type Range, type Reading, readQuantity, report, wordAt } from './reading.ts';
+import { isMapValue, type Path, valueAt } from './source.ts';
+import {
+  givenConductivity,
+  solidConductivity,
+  strandedConductivity,
+  temperatureCaution,
+  type WireMetal,
+} from './wire-metal.ts';
+
+/** Ends of what the model describes: a few hundred atoms, and more than any conductor built. */
+const DIAMETER: Range = { min: 1e-9, max: 100, text: '1 nm to 100 m' };
+const RADIUS: Range = { min: 5e-10, max: 50, text: '0.5 nm to 50 m' };
+const AREA: Range = { min: 1e-18, max: 1e4, text: '1e-18 m² to 1e4 m²' };
+const INSULATION: Range = { min: 0, max: 100, text: '0 to 100 m' };
+
+/** A wire without its place; parts that could not be read are undefined. */
+export interface WireDraft {
+  readonly name: string;
+  /** [m] */
+  readonly radius: number | undefined;
+  /** [S/m] */
+  readonly conductivity: number | undefined;
+  readonly material: Material | undefined;
+  /** [°C] */
+  readonly temperature: number;
+  /** [m] */
+  readonly insulation: number;
+}
+
+export interface WireDrafts {
+  readonly wires: readonly WireDraft[];
+  readonly cautions: readonly Caution[];
+}
+
+/** @param temperature [°C] of wires that say nothing */
+export function readWires(reading: Reading, materials: Materials, temperature: number): WireDrafts {
+  const names = readNames(reading, 'wires');
+  if (names.length > MAX_WIRES) {
+    report(reading, 'TOO_LARGE', `${names.length} wires; the most is ${MAX_WIRES}`, ['wires']);
+    return { wires: [], cautions: [] };
+  }
+  if (names.length === 0 && isMapValue(valueAt(reading.source.data, ['wires']))) {
+    report(reading, 'MISSING', 'no wires; give at least two', ['wires']);
+  }
+  const wires = names.map((name) => readWire(reading, name, materials, temperature));
+  return { wires, cautions: cautionsOf(reading, wires) };
+}
+
+function readWire(reading: Reading, name: string, materials: Materials, common: number): WireDraft {
+  const path: Path = ['wires', name];
+  const written = valueAt(reading.source.data, path);
+  const key = (k: string): Path => [...path, k];
+  const radius = isMapValue(written) ? readRadius(reading, path, written) : undefined;
+  const own = readQuantity(reading, key('temperature'), 'temperature', TEMPERATURE);
+  const temperature = own ?? common;
+  const insulation = readQuantity(reading, key('insulation'), 'length', INSULATION) ?? 0;
+  const material = readMaterialName(reading, key('material'), materials);
+  const draft = {
+    name,
+    radius,
+    conductivity: undefined,
+    material,
+    temperature,
+    insulation,
+  };
+  if (!isMapValue(written) || radius === undefined || material === undefined) return draft;
+  return {
+    ...draft,
+    conductivity: conductivityOf(reading, path, written, {
+      material,
+      temperature,
+      radius,
+    }),
+  };
+}
+
+function conductivityOf(
+  reading: Reading,
+  path: Path,
+  written: Record<string, unknown>,
+  wire: WireMetal,
+): number | undefined {
+  const stranded = 'stranded' in written;
+  const resistance = 'resistance' in written;
+  if (stranded && resistance) {
+    report(reading, 'WRONG_TYPE', 'stranded and resistance exclude each other; give one', path);
+    return undefined;
+  }
+  if (wire.material.resistivity === 0 && (stranded || resistance)) {
+    report(
+      reading,
+      'WRONG_TYPE',
+      'a perfect conductor has no resistance; name a metal, or leave it out',
+      path,
+    );
+    return undefined;
+  }
+  if (stranded) return strandedConductivity(reading, [...path, 'stranded'], wire);
+  if (resistance) return givenConductivity(reading, [...path, 'resistance'], wire);
+  return solidConductivity(reading, path, wire);
+}
+
+const SIZE_KEYS = ['diameter', 'radius', 'area', 'gauge'] as const;
+
+/** [m] */
+function readRadius(reading: Reading, path: Path, written: Record<string, unknown>): number | undefined {
+  const key = (k: string): Path => [...path, k];
+  const given = SIZE_KEYS.filter((k) => k in written);
+  if (given.length > 1) {
+    report(reading, 'WRONG_TYPE', `${given.join(' and ')} exclude each other; give one size`, key(given[1]!));
+    return undefined;
+  }
+  const size = given[0];
+  if (size === undefined) {
+    reportNoSize(reading, path);
+    return undefined;
+  }
+  if ('stranded' in written && (size === 'area' || size === 'gauge')) {
+    const text = `stranded says the metal area; give the outer diameter beside it, not ${size}`;
+    report(reading, 'WRONG_TYPE', text, key(size));
+    return undefined;
+  }
+  switch (size) {
+    case 'diameter':
+      return half(readQuantity(reading, key(size), 'length', DIAMETER));
+    case 'radius':
+      return readQuantity(reading, key(size), 'length', RADIUS);
+    case 'area': {
+      const area = readQuantity(reading, key(size), 'area', AREA);
+      return area === undefined ? undefined : Math.sqrt(area / Math.PI);
+    }
+    case 'gauge':
+      return half(readGauge(reading, key(size)));
+  }
+}
+
+const half = (diameter: number | undefined) => (diameter === undefined ? undefined : diameter / 2);
+
+/** A misspelt or later key explains the missing size: then no second line. */
+function reportNoSize(reading: Reading, path: Path): void {
+  const known = new Set<string>([
+    ...SIZE_KEYS,
+    'stranded',
+    'resistance',
+    'material',
+    'temperature',
+    'insulation',
+    'at',
+  ]);
+  if (reading.source.keys(path).some((k) => !known.has(k) || isLaterKey(path, k))) return;
+  const text = `wire ${quote(path.at(-1))} has no size; give diameter, radius, area or gauge`;
+  report(reading, 'MISSING', text, path);
+}
+
+/** [m] diameter */
+function readGauge(reading: Reading, path: Path): number | undefined {
+  const value = wordAt(reading, path);
+  if (typeof value !== 'string' && typeof value !== 'number') return undefined;
+  const size = parseWireSize(String(value));
+  if (size !== undefined) return size.diameter;
+  const hint =
+    typeof value === 'number' || /^[\d/]+$/.test(value.trim())
+      ? `; write AWG ${value} or SWG ${value}`
+      : '; gauges are AWG 4/0 to AWG 56 and SWG 7/0 to SWG 50, for other sizes give diameter or area';
+  report(reading, 'UNKNOWN_GAUGE', `no wire size ${describeValue(value)}${hint}`, path);
+  return undefined;
+}
+
+function cautionsOf(reading: Reading, wires: readonly WireDraft[]): Caution[] {
+  const cautions: Caution[] = [];
+  const texts = new Set<string>();
+  for (const { material, temperature } of wires) {
+    const text = material === undefined ? undefined : temperatureCaution(material, temperature);
+    if (text !== undefined) texts.add(text);
+  }
+  for (const text of texts) cautions.push({ code: 'TEMPERATURE_RANGE', text });
+  const strands = wires.filter(
+    (w) => valueAt(reading.source.data, ['wires', w.name, 'stranded']) !== undefined,
+  );
+  if (strands.length > 0) {
+    const names = quoteList(strands.map((w) => w.name));
+    const text = `${names}: a strand taken as one round wire of its outer diameter with the resistance of its metal area (no lay); currents between its strands are not modelled`;
+    cautions.push({ code: 'STRAND_AS_WIRE', text });
+  }
+  return cautions;
+}
