@@ -8,6 +8,9 @@ import { FAMILIES, type Family } from './families.ts';
 /** Metadata key under which a quantity carries its family into the JSON Schema. */
 export const FAMILY_KEY = 'x-rimflow-quantity';
 
+const NAME = '^[A-Za-z0-9_-]+$';
+const LET_NAME = '^[A-Za-z_][A-Za-z0-9_]*$';
+
 function quantity(family: Family, description: string, ...examples: (string | number)[]) {
   const { name, example } = FAMILIES[family];
   const error = `expected ${name} such as ${example}, or a let name`;
@@ -30,8 +33,10 @@ function flag(description: string) {
     .meta({ description });
 }
 
-function record<T extends z.ZodType>(value: T, expected: string, description: string) {
-  return z.record(z.string(), value, { error: `expected ${expected}` }).meta({ description });
+/** `names` is the pattern of its keys, for editors; the program checks them apart, to say more. */
+function record<T extends z.ZodType>(value: T, expected: string, description: string, names = NAME) {
+  const propertyNames = { type: 'string', pattern: names };
+  return z.record(z.string(), value, { error: `expected ${expected}` }).meta({ description, propertyNames });
 }
 
 const name = (description: string, ...examples: string[]) => text('a name', description, ...examples);
@@ -43,7 +48,7 @@ const at = z
       z.tuple(
         [quantity('length', 'x of the centre', '2 mm'), quantity('length', 'y of the centre', '3 mm')],
         {
-          error: 'expected two coordinates, such as [0 mm, 2 mm]',
+          error: 'expected two coordinates such as [0 mm, 2.5 mm]; a comma ends a value',
         },
       ),
       z.strictObject({
@@ -192,7 +197,7 @@ export const caseSchema = z
     {
       rimflow: z.literal(1).meta({ description: 'Version of this format' }),
       title: text('a line of text', 'Title of results', 'Pump inverter to motor, flat pair').optional(),
-      let: record(letValue, 'a map of names to values', 'Names for quantities or words').optional(),
+      let: record(letValue, 'a map of names to values', 'Names for quantities or words', LET_NAME).optional(),
       temperature: quantity('temperature', 'Of every wire that says nothing else; default 20 °C').optional(),
       length: quantity(
         'length',

@@ -57,6 +57,13 @@ export function safeExpression(text: string): string {
       throw new Fault('TOO_LARGE', `an expression of over ${MAX_EXPRESSION_TOKENS} parts; use let names`);
     }
   }
+  if (open !== 0) {
+    const why = 'a parenthesis without its partner';
+    throw new Fault(
+      'EXPRESSION',
+      `can not read ${quote(text)}: ${why}; inside [ ] and { } put commas in quotes`,
+    );
+  }
   return dropUnitOne(tokens).join(' ');
 }
 

@@ -4,7 +4,7 @@ import { type Group, reconcileGroups } from './groups.ts';
 import { readNames } from './names.ts';
 import { didYouMean } from './nearest.ts';
 import { quote } from './quote.ts';
-import { type Range, type Reading, readFlag, readQuantity, report } from './reading.ts';
+import { label, type Range, type Reading, readFlag, readQuantity, report } from './reading.ts';
 import { isMapValue, type Path, valueAt } from './source.ts';
 
 const RESISTANCE: Range = { min: 0, max: 1e12, text: '0 to 1e12 ohm' };
@@ -36,8 +36,8 @@ export function readLoops(reading: Reading, names: readonly string[]): LoopsAndB
     });
     const go = sideOf('go');
     const back = sideOf('return');
-    checkSides(reading, name, go, back);
-    sides.push(go, back);
+    const sound = checkSides(reading, name, go, back);
+    sides.push(go, sound ? back : { ...back, members: [] });
     return { name, series, extra: readExtra(reading, [...path, 'extra']) };
   });
   const bonds = readBonded(reading, index);
@@ -62,7 +62,8 @@ function readWireList(reading: Reading, path: Path, index: ReadonlyMap<string, n
   const list = Array.isArray(written) ? written : [written];
   const members: number[] = [];
   list.forEach((item, k) => {
-    const name = reading.lets.resolve(item);
+    // a wire of that name comes before a let name
+    const name = index.has(String(item)) ? item : reading.lets.resolve(item);
     if (typeof name !== 'string' && typeof name !== 'number') return;
     const itemPath = Array.isArray(written) ? [...path, k] : path;
     const wire = index.get(String(name).trim());
@@ -72,12 +73,7 @@ function readWireList(reading: Reading, path: Path, index: ReadonlyMap<string, n
     } else members.push(wire);
   });
   if (Array.isArray(written) && written.length === 0) {
-    report(
-      reading,
-      'EMPTY_LOOP',
-      `${path.slice(-2).join(' of ')}: an empty list; name at least one wire`,
-      path,
-    );
+    report(reading, 'EMPTY_LOOP', `${label(path)} is an empty list; name at least one wire`, path);
   }
   return members;
 }
@@ -93,17 +89,20 @@ function reportUnknown(reading: Reading, name: string, index: ReadonlyMap<string
   report(reading, 'UNKNOWN_WIRE', `no wire ${quote(name)}${near}; name one of wires`, path);
 }
 
-function checkSides(reading: Reading, name: string, go: Group, back: Group): void {
+/** @returns false for a wire on both sides, which no further check can add to */
+function checkSides(reading: Reading, name: string, go: Group, back: Group): boolean {
   const shared = go.members.filter((wire) => back.members.includes(wire));
   if (shared.length > 0) {
     const text = `loop ${quote(name)} has a wire on both sides; remove it from go or from return`;
     report(reading, 'BOTH_SIDES', text, back.path);
+    return false;
   }
   const counts = [go.members.length, back.members.length];
   if (go.series && counts[0] !== counts[1] && counts[0]! > 0 && counts[1]! > 0) {
     const net = `${counts[0]} wires go and ${counts[1]} return, a net current of ${counts[0]! - counts[1]!} times its own`;
     report(reading, 'EMPTY_LOOP', `loop ${quote(name)} in series: ${net}; give as many as return`, go.path);
   }
+  return true;
 }
 
 function readExtra(reading: Reading, path: Path): LumpedExtra {

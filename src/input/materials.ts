@@ -33,6 +33,10 @@ export function readMaterials(reading: Reading): Materials {
       const text = `${quote(name)} is a built-in metal; take another name`;
       reportAt(reading, 'NAME', text, reading.source.keyPlace(['materials', name]));
     }
+    if (reading.lets.resolve(name) !== name) {
+      const text = `${quote(name)} is a let name and a material; rename one`;
+      reportAt(reading, 'NAME', text, reading.source.keyPlace(['materials', name]));
+    }
     materials.set(name, readMaterial(reading, name));
   }
   return materials;
@@ -47,11 +51,14 @@ function readMaterial(reading: Reading, name: string): Material | undefined {
   const both = 'conductivity' in written && 'resistivity' in written;
   const none = !('conductivity' in written) && !('resistivity' in written);
   if (both) {
-    report(reading, 'WRONG_TYPE', `material ${quote(name)} has conductivity and resistivity; give one`, path);
+    report(reading, 'WRONG_TYPE', `material ${quote(name)} has conductivity and resistivity; give one`, [
+      ...path,
+      'resistivity',
+    ]);
   }
   if (none) {
     const text = `material ${quote(name)} has neither conductivity nor resistivity; give one, such as 55 MS/m`;
-    report(reading, 'MISSING', text, path);
+    reportAt(reading, 'MISSING', text, reading.source.keyPlace(path));
   }
   const key = (k: string): Path => [...path, k];
   const coefficient = readQuantity(

@@ -25,12 +25,12 @@ const LONGEST_WORD = 64;
 /** Candidates beyond this many are not looked at. */
 const MOST_CANDIDATES = 3000;
 
-/** The nearest candidate, or undefined when none is near: at most a third of the letters may differ, case apart. */
+/** The nearest candidate, or undefined when none is near: at most a third of the letters (one of three) may differ, case apart. */
 export function nearest(word: string, candidates: Iterable<string>): string | undefined {
   if (word.length > LONGEST_WORD) return undefined;
   const typed = word.toLowerCase();
   let best: string | undefined;
-  let bestDistance = Math.max(1, Math.floor(word.length / 3)) + 1;
+  let bestDistance = Math.floor(word.length / 3) + 1;
   let seen = 0;
   for (const candidate of candidates) {
     if (++seen > MOST_CANDIDATES) break;
@@ -44,8 +44,8 @@ export function nearest(word: string, candidates: Iterable<string>): string | un
   return best;
 }
 
-/** `; did you mean "x"?` or nothing. */
+/** ` (did you mean "x"?)` or nothing. */
 export function didYouMean(word: string, candidates: Iterable<string>): string {
   const found = nearest(word, candidates);
-  return found === undefined ? '' : `; did you mean "${found}"?`;
+  return found === undefined ? '' : ` (did you mean "${found}"?)`;
 }

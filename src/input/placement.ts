@@ -132,7 +132,7 @@ function readAt(
     return x === undefined || y === undefined ? undefined : { x, y };
   }
   if (!isMapValue(written)) return undefined;
-  const from = readText(reading, key('from'));
+  const from = readOrigin(reading, key('from'), byName);
   const angle = 'angle' in written ? readQuantity(reading, key('angle'), 'angle') : 0;
   const distance = readQuantity(reading, key('distance'), 'length', DISTANCE);
   const touching = readFlag(reading, key('touching')) ?? false;
@@ -153,6 +153,16 @@ function readAt(
     return undefined;
   }
   return { from, angle, distance: touching ? undefined : distance };
+}
+
+/** Name of the wire to stand from; a wire of that name comes before a let name. */
+function readOrigin(
+  reading: Reading,
+  path: Path,
+  byName: ReadonlyMap<string, WireDraft>,
+): string | undefined {
+  const typed = String(valueAt(reading.source.data, path));
+  return byName.has(typed) ? typed : readText(reading, path);
 }
 
 function smallestGapCaution(names: readonly string[]): Caution[] {

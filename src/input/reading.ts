@@ -46,9 +46,14 @@ export interface Range {
 /** Quantity behind a text. Throws Fault, Reported or NeedsExpressions. */
 export function quantityOf(text: string, parser: ExpressionParser | undefined, named: NamedValues): Quantity {
   const plain = plainUnits(text);
+  if (/^[+-]?\.?(nan|inf|infinity)$/i.test(plain)) {
+    throw new Fault('RANGE', `${quote(text)} is not a finite number; give one`);
+  }
   if (plain === '') throw new Fault('MISSING', 'an empty text in place of a quantity');
   const common = commonQuantity(plain);
   if (common !== undefined) return common;
+  const standing = named.lookUp(plain);
+  if (standing !== undefined) return standing;
   if (parser === undefined) throw new NeedsExpressions();
   return evaluateExpression(plain, parser, named);
 }
@@ -96,7 +101,7 @@ export function readQuantity(
     const quantity =
       typeof value === 'number'
         ? { value, dimension: FAMILIES.number.dimension, celsius: false }
-        : quantityOf(value, reading.parser, reading.lets);
+        : quantityOf(String(typed), reading.parser, reading.lets);
     const result = valueIn(family, quantity, text);
     if (range !== undefined && !(result >= range.min && result <= range.max)) {
       throw new Fault('RANGE', `${text} is outside ${range.text}; give a value within`);

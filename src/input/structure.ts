@@ -7,6 +7,9 @@ import { didYouMean } from './nearest.ts';
 import { describeValue, quote } from './quote.ts';
 import { type Path, type Source, valueAt } from './source.ts';
 
+/** Faults of shape that are put into words; a file with more is no cross-section. */
+const MOST_ISSUES = 1000;
+
 type Issue = z.core.$ZodIssue;
 
 /** All faults of shape; reading goes on afterwards with what is well formed. */
@@ -14,13 +17,13 @@ export function checkStructure(source: Source): Problem[] {
   // one parse does not repay the compiled form that zod makes by default
   const result = caseSchema.safeParse(source.data, { jitless: true });
   if (result.success) return [];
-  return result.error.issues.flatMap((issue) => toProblems(issue, [], source));
+  return result.error.issues.slice(0, MOST_ISSUES).flatMap((issue) => toProblems(issue, [], source));
 }
 
 function toProblems(issue: Issue, outer: Path, source: Source): Problem[] {
   const path = [...outer, ...issue.path] as Path;
   if (issue.code === 'unrecognized_keys') {
-    return issue.keys.map((key) => unknownKey(path, key, source));
+    return issue.keys.slice(0, MOST_ISSUES).map((key) => unknownKey(path, key, source));
   }
   if (issue.code === 'invalid_union') {
     const branch = likeliestBranch(issue.errors);
@@ -38,6 +41,9 @@ function toProblems(issue: Issue, outer: Path, source: Source): Problem[] {
   }
   const missing = value === undefined || value === null;
   const code: ErrorCode = missing ? 'MISSING' : 'WRONG_TYPE';
+  if (path.length === 0 && missing) {
+    return [new Problem('MISSING', `the file is empty; ${issue.message}`, source.place(path))];
+  }
   const key = path.length === 0 ? 'the file' : quote(path.at(-1));
   const expected = issue.message.startsWith('expected') ? issue.message : 'see the format';
   return [

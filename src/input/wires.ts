@@ -5,8 +5,8 @@ import { isLaterKey } from './later-keys.ts';
 import { MAX_WIRES } from './limits.ts';
 import { type Material, type Materials, readMaterialName, TEMPERATURE } from './materials.ts';
 import { readNames } from './names.ts';
-import { describeValue, quote, quoteList } from './quote.ts';
-import { type Range, type Reading, readQuantity, report, wordAt } from './reading.ts';
+import { quote, quoteList } from './quote.ts';
+import { type Range, type Reading, readQuantity, report, reportAt, wordAt } from './reading.ts';
 import { isMapValue, type Path, valueAt } from './source.ts';
 import {
   givenConductivity,
@@ -89,10 +89,11 @@ function conductivityOf(
   written: Record<string, unknown>,
   wire: WireMetal,
 ): number | undefined {
+  const key = (k: string): Path => [...path, k];
   const stranded = 'stranded' in written;
   const resistance = 'resistance' in written;
   if (stranded && resistance) {
-    report(reading, 'WRONG_TYPE', 'stranded and resistance exclude each other; give one', path);
+    report(reading, 'WRONG_TYPE', 'stranded and resistance exclude each other; give one', key('resistance'));
     return undefined;
   }
   if (wire.material.resistivity === 0 && (stranded || resistance)) {
@@ -100,13 +101,13 @@ function conductivityOf(
       reading,
       'WRONG_TYPE',
       'a perfect conductor has no resistance; name a metal, or leave it out',
-      path,
+      key(stranded ? 'stranded' : 'resistance'),
     );
     return undefined;
   }
-  if (stranded) return strandedConductivity(reading, [...path, 'stranded'], wire);
-  if (resistance) return givenConductivity(reading, [...path, 'resistance'], wire);
-  return solidConductivity(reading, path, wire);
+  if (stranded) return strandedConductivity(reading, key('stranded'), wire);
+  if (resistance) return givenConductivity(reading, key('resistance'), wire);
+  return solidConductivity(reading, key('temperature'), wire);
 }
 
 const SIZE_KEYS = ['diameter', 'radius', 'area', 'gauge'] as const;
@@ -158,7 +159,7 @@ function reportNoSize(reading: Reading, path: Path): void {
   ]);
   if (reading.source.keys(path).some((k) => !known.has(k) || isLaterKey(path, k))) return;
   const text = `wire ${quote(path.at(-1))} has no size; give diameter, radius, area or gauge`;
-  report(reading, 'MISSING', text, path);
+  reportAt(reading, 'MISSING', text, reading.source.keyPlace(path));
 }
 
 /** [m] diameter */
@@ -171,7 +172,7 @@ function readGauge(reading: Reading, path: Path): number | undefined {
     typeof value === 'number' || /^[\d/]+$/.test(value.trim())
       ? `; write AWG ${value} or SWG ${value}`
       : '; gauges are AWG 4/0 to AWG 56 and SWG 7/0 to SWG 50, for other sizes give diameter or area';
-  report(reading, 'UNKNOWN_GAUGE', `no wire size ${describeValue(value)}${hint}`, path);
+  report(reading, 'UNKNOWN_GAUGE', `no wire size ${quote(value)}${hint}`, path);
   return undefined;
 }
 

@@ -124,12 +124,12 @@ export const METALS: readonly Metal[] = [
   }),
   metal('nickel', {
     resistivity: 6.93e-8,
-    coefficient: 0.0064,
+    coefficient: 0.006,
     permeability: 100,
-    range: [-25, 100],
+    range: [-10, 100],
     meanFreePath: 5.87e-9,
     source:
-      'pure: CRC Handbook of Chemistry and Physics, electrical resistivity of pure metals, 293 K; coefficient: slope between 273 K and 400 K of the same table; from memory. Relative permeability: typical of weak fields, common practice, no source',
+      'pure: CRC Handbook of Chemistry and Physics, electrical resistivity of pure metals, 293 K; coefficient: US Bureau of Standards, Circular 74 (1937), table of resistivities; from memory. Relative permeability: typical of weak fields, common practice, no source',
   }),
   metal('steel', {
     aliases: ['mild-steel'],
