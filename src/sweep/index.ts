@@ -1,1 +1,7 @@
-export type { CurrentSeries, FrequencyTable, LoopSeries, MutualSeries } from './table.ts';
+export { frequencyTable, type SweepOptions } from "./frequency-table.ts";
+export type {
+	CurrentSeries,
+	FrequencyTable,
+	LoopSeries,
+	MutualSeries,
+} from "./table.ts";
