@@ -1,15 +1,15 @@
 export {
-	type ComplexVector,
-	type GmresOptions,
-	type GmresResult,
-	gmres,
-	KrylovSpace,
-	norm2,
-} from "./gmres.ts";
+  type ComplexVector,
+  type GmresOptions,
+  type GmresResult,
+  gmres,
+  KrylovSpace,
+  norm2,
+} from './gmres.ts';
 export {
-	type ComplexLu,
-	conditionEstimate,
-	factoriseLu,
-	solveLu,
-	solveLuAdjoint,
-} from "./lu.ts";
+  type ComplexLu,
+  conditionEstimate,
+  factoriseLu,
+  solveLu,
+  solveLuAdjoint,
+} from './lu.ts';

@@ -1,17 +1,17 @@
 /** The stated error of R and L of each loop: truncation, iteration and rounding, each an upper estimate. */
-import { norm2 } from "../complex/index.ts";
-import { truncationTail } from "../proximity/index.ts";
-import type { Excitation, FrequencyPoint } from "./excitation.ts";
+import { norm2 } from '../complex/index.ts';
+import { truncationTail } from '../proximity/index.ts';
+import type { Excitation, FrequencyPoint } from './excitation.ts';
 
 /** What may be wrong with the complex inductance of one loop, in units of mu0/(4 pi). */
 export interface InductanceError {
-	/** [1] of the real part */
-	readonly re: number;
-	/** [1] of the imaginary part */
-	readonly im: number;
-	/** [1] share of each body in the truncation of the real and of the imaginary part */
-	readonly tailRe: Float64Array;
-	readonly tailIm: Float64Array;
+  /** [1] of the real part */
+  readonly re: number;
+  /** [1] of the imaginary part */
+  readonly im: number;
+  /** [1] share of each body in the truncation of the real and of the imaginary part */
+  readonly tailRe: Float64Array;
+  readonly tailIm: Float64Array;
 }
 
 /**
@@ -24,21 +24,21 @@ const COUPLING = 3;
 const ROUNDING = 2e-15;
 
 export function inductanceError(
-	point: FrequencyPoint,
-	alpha: Float64Array,
-	excitation: Excitation,
+  point: FrequencyPoint,
+  alpha: Float64Array,
+  excitation: Excitation,
 ): InductanceError {
-	const { multipoles } = excitation;
-	const tail = truncationTail(multipoles.scaled, point.system.active, alpha);
-	const residual = norm2(multipoles.residual);
-	const solver = multipoles.krylov.inverseNorm * residual * residual;
-	const size = norm2(multipoles.scaled);
-	const rounding = ROUNDING * size * size;
-	const sum = (v: Float64Array) => v.reduce((s, x) => s + x, 0);
-	return {
-		re: COUPLING * sum(tail.re) + solver + rounding,
-		im: COUPLING * sum(tail.im) + solver + rounding,
-		tailRe: tail.re.map((x) => COUPLING * x),
-		tailIm: tail.im.map((x) => COUPLING * x),
-	};
+  const { multipoles } = excitation;
+  const tail = truncationTail(multipoles.scaled, point.system.active, alpha);
+  const residual = norm2(multipoles.residual);
+  const solver = multipoles.inverseNorm * residual * residual;
+  const size = norm2(multipoles.scaled);
+  const rounding = ROUNDING * size * size;
+  const sum = (v: Float64Array) => v.reduce((s, x) => s + x, 0);
+  return {
+    re: COUPLING * sum(tail.re) + solver + rounding,
+    im: COUPLING * sum(tail.im) + solver + rounding,
+    tailRe: tail.re.map((x) => COUPLING * x),
+    tailIm: tail.im.map((x) => COUPLING * x),
+  };
 }

@@ -1,3 +1,3 @@
-export { type Circuit, circuitOf } from "./circuit.ts";
-export { impedanceAt, type LoopImpedance } from "./impedance.ts";
-export { type PreparedCase, prepareCase } from "./prepared.ts";
+export { type Circuit, circuitOf } from './circuit.ts';
+export { impedanceAt, type LoopImpedance } from './impedance.ts';
+export { type PreparedCase, prepareCase } from './prepared.ts';

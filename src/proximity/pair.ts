@@ -9,7 +9,7 @@
 
 /** [1] alpha_i of body i with radius `a` beside a body of radius `b`; centres `d` apart, a + b < d; all [m]. */
 export function decayRate(a: number, b: number, d: number): number {
-	// cosh alpha - 1, written with the gap so that close pairs keep their digits.
-	const x = ((d - a - b) * (d - a + b)) / (2 * a * d);
-	return Math.log1p(x + Math.sqrt(x * (2 + x)));
+  // cosh alpha - 1, written with the gap so that close pairs keep their digits.
+  const x = ((d - a - b) * (d - a + b)) / (2 * a * d);
+  return Math.log1p(x + Math.sqrt(x * (2 + x)));
 }

@@ -10,28 +10,28 @@
 
 /** Entries n <= orders of i, m <= orders of j, cut where they can not matter. */
 export interface TranslationTable {
-	/** highest n kept */
-	readonly rows: number;
-	/** highest m kept */
-	readonly columns: number;
-	/** entries kept in row n-1: orders m = 1 .. width, never growing with n */
-	readonly width: Int32Array;
-	/** start of row n-1 in `values` */
-	readonly start: Int32Array;
-	/** [1] t_nm, row after row */
-	readonly values: Float64Array;
+  /** highest n kept */
+  readonly rows: number;
+  /** highest m kept */
+  readonly columns: number;
+  /** entries kept in row n-1: orders m = 1 .. width, never growing with n */
+  readonly width: Int32Array;
+  /** start of row n-1 in `values` */
+  readonly start: Int32Array;
+  /** [1] t_nm, row after row */
+  readonly values: Float64Array;
 }
 
 export interface TranslationOptions {
-	/** [1] a_i/|D| */
-	readonly u: number;
-	/** [1] a_j/|D| */
-	readonly v: number;
-	/** [1] decay rate of the coefficients of i and of j in their surroundings */
-	readonly alphaI: number;
-	readonly alphaJ: number;
-	readonly ordersI: number;
-	readonly ordersJ: number;
+  /** [1] a_i/|D| */
+  readonly u: number;
+  /** [1] a_j/|D| */
+  readonly v: number;
+  /** [1] decay rate of the coefficients of i and of j in their surroundings */
+  readonly alphaI: number;
+  readonly alphaJ: number;
+  readonly ordersI: number;
+  readonly ordersJ: number;
 }
 
 /**
@@ -41,42 +41,42 @@ export interface TranslationOptions {
 const NEGLIGIBLE = 1e-15;
 
 export function translationTable(o: TranslationOptions): TranslationTable {
-	const { u, v } = o;
-	const most = o.ordersJ;
-	const width = new Int32Array(o.ordersI);
-	const start = new Int32Array(o.ordersI);
-	const falling = new Float64Array(most + 1);
-	for (let m = 1; m <= most; m++) falling[m] = Math.exp(-o.alphaJ * m);
-	// p(n-1, m-1) over m for the current n
-	const p = new Float64Array(most + 1);
-	p[0] = 1;
-	for (let m = 1; m <= most; m++) p[m] = p[m - 1] * v;
-	const chunks: Float64Array[] = [];
-	let total = 0;
-	let rows = 0;
-	let previous = most;
-	for (let n = 1; n <= o.ordersI; n++) {
-		if (n > 1) {
-			p[0] *= u;
-			for (let m = 1; m <= most; m++) p[m] = u * p[m] + v * p[m - 1];
-		}
-		const row = new Float64Array(previous);
-		const fallingI = Math.exp(-o.alphaI * n);
-		let kept = 0;
-		for (let m = 1; m <= previous; m++) {
-			const t = (p[m - 1] * u * v * (n + m - 1)) / Math.sqrt(n * m);
-			row[m - 1] = t;
-			if (t * falling[m] * fallingI > NEGLIGIBLE) kept = m;
-		}
-		if (kept === 0) break;
-		width[n - 1] = kept;
-		start[n - 1] = total;
-		chunks.push(row.subarray(0, kept));
-		total += kept;
-		previous = kept;
-		rows = n;
-	}
-	const values = new Float64Array(total);
-	for (let n = 0; n < rows; n++) values.set(chunks[n], start[n]);
-	return { rows, columns: rows === 0 ? 0 : width[0], width, start, values };
+  const { u, v } = o;
+  const most = o.ordersJ;
+  const width = new Int32Array(o.ordersI);
+  const start = new Int32Array(o.ordersI);
+  const falling = new Float64Array(most + 1);
+  for (let m = 1; m <= most; m++) falling[m] = Math.exp(-o.alphaJ * m);
+  // p(n-1, m-1) over m for the current n
+  const p = new Float64Array(most + 1);
+  p[0] = 1;
+  for (let m = 1; m <= most; m++) p[m] = p[m - 1] * v;
+  const chunks: Float64Array[] = [];
+  let total = 0;
+  let rows = 0;
+  let previous = most;
+  for (let n = 1; n <= o.ordersI; n++) {
+    if (n > 1) {
+      p[0] *= u;
+      for (let m = 1; m <= most; m++) p[m] = u * p[m] + v * p[m - 1];
+    }
+    const row = new Float64Array(previous);
+    const fallingI = Math.exp(-o.alphaI * n);
+    let kept = 0;
+    for (let m = 1; m <= previous; m++) {
+      const t = (p[m - 1] * u * v * (n + m - 1)) / Math.sqrt(n * m);
+      row[m - 1] = t;
+      if (t * falling[m] * fallingI > NEGLIGIBLE) kept = m;
+    }
+    if (kept === 0) break;
+    width[n - 1] = kept;
+    start[n - 1] = total;
+    chunks.push(row.subarray(0, kept));
+    total += kept;
+    previous = kept;
+    rows = n;
+  }
+  const values = new Float64Array(total);
+  for (let n = 0; n < rows; n++) values.set(chunks[n], start[n]);
+  return { rows, columns: rows === 0 ? 0 : width[0], width, start, values };
 }

@@ -1,7 +1,7 @@
-export { frequencyTable, type SweepOptions } from "./frequency-table.ts";
+export { frequencyTable, type SweepOptions } from './frequency-table.ts';
 export type {
-	CurrentSeries,
-	FrequencyTable,
-	LoopSeries,
-	MutualSeries,
-} from "./table.ts";
+  CurrentSeries,
+  FrequencyTable,
+  LoopSeries,
+  MutualSeries,
+} from './table.ts';

@@ -20,7 +20,14 @@ export function wire(x: number, y: number, radius: number, more: Partial<Wire> =
 }
 
 export function loop(go: number[], back: number[], more: Partial<Loop> = {}): Loop {
-  return { name: `l${go}-${back}`, go, return: back, series: false, extra: { resistance: 0, inductance: 0 }, ...more };
+  return {
+    name: `l${go}-${back}`,
+    go,
+    return: back,
+    series: false,
+    extra: { resistance: 0, inductance: 0 },
+    ...more,
+  };
 }
 
 export function caseOf(wires: Wire[], loops: Loop[], more: Partial<Case> = {}): Case {

@@ -27,7 +27,11 @@ const TOLERANCE = 1e-8;
 describe('against finite elements', () => {
   it.each(records.map((r) => [`${r.case} a/delta ${r.a_over_delta}`, r] as const))('%s', (_, r) => {
     const wires = r.conductors_mm.map((c, i) =>
-      wire(c.x * 1e-3, c.y * 1e-3, c.r * 1e-3, { name: `w${i}`, conductivity: c.sig, relativePermeability: c.mur }),
+      wire(c.x * 1e-3, c.y * 1e-3, c.r * 1e-3, {
+        name: `w${i}`,
+        conductivity: c.sig,
+        relativePermeability: c.mur,
+      }),
     );
     const c = caseOf(wires, [loop(r.groups[0], r.groups[1])], { tolerance: TOLERANCE });
     const z = impedanceAt(prepareCase(c, r.freq_hz), r.freq_hz);

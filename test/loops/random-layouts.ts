@@ -18,7 +18,12 @@ const METALS = [
 ];
 
 /** A wire beside an earlier one at a chosen gap, where it overlaps no other; undefined after too many tries. */
-function placeBeside(wires: readonly Wire[], radius: number, gap: number, random: () => number): [number, number] | undefined {
+function placeBeside(
+  wires: readonly Wire[],
+  radius: number,
+  gap: number,
+  random: () => number,
+): [number, number] | undefined {
   for (let attempt = 0; attempt < 200; attempt++) {
     const host = wires[Math.floor(random() * wires.length)];
     const d = host.radius + radius + gap * 2 * Math.min(radius, host.radius);
@@ -58,5 +63,9 @@ export function randomLayout(random: () => number): RandomLayout {
   // a/delta from 0.1 to 3000 for the base radius in copper
   const ratio = 10 ** (-1 + 4.5 * random());
   const frequency = (ratio / base) ** 2 / (Math.PI * 4e-7 * Math.PI * 58e6);
-  return { case: caseOf(wires, [loop(members(0), members(1))]), frequency: Math.min(frequency, 1e12), smallestGap };
+  return {
+    case: caseOf(wires, [loop(members(0), members(1))]),
+    frequency: Math.min(frequency, 1e12),
+    smallestGap,
+  };
 }
