@@ -5,7 +5,7 @@ import type { ExpressionParser } from './expression.ts';
 import { NeedsExpressions } from './fault.ts';
 import { readFrequencies } from './frequencies.ts';
 import { NO_LETS, readLetNames } from './let-names.ts';
-import { MAX_PROBLEMS, MAX_TITLE_LENGTH } from './limits.ts';
+import { MAX_PROBLEMS, MAX_SUGGESTIONS, MAX_TITLE_LENGTH } from './limits.ts';
 import { readLoops } from './loops.ts';
 import { readMaterials, TEMPERATURE } from './materials.ts';
 import { checkOverlaps } from './overlaps.ts';
@@ -58,6 +58,7 @@ function readAll(
     problems: [...known],
     parser,
     lets: NO_LETS,
+    suggestionsLeft: MAX_SUGGESTIONS,
   };
   reading.lets = readLetNames(reading, overrides);
   const temperature =

@@ -3,7 +3,7 @@
  * written anew with single spaces, so that the parser behind meets nothing but these.
  */
 import { Fault } from './fault.ts';
-import { MAX_EXPRESSION_LENGTH, MAX_EXPRESSION_TOKENS, MAX_PARENTHESES } from './limits.ts';
+import { MAX_EXPRESSION_TOKENS, MAX_PARENTHESES } from './limits.ts';
 import { quote } from './quote.ts';
 
 const TOKEN = /\s+|(\d+\.?\d*(?:e[+-]?\d+)?|\.\d+(?:e[+-]?\d+)?)|([A-Za-z_]\w*)|([-+*/^(),])/iy;
@@ -23,10 +23,6 @@ export function identifiersOf(text: string): string[] {
 
 /** Tokens of a `plainUnits` text, joined by single spaces. Throws EXPRESSION, TOO_LARGE or RANGE. */
 export function safeExpression(text: string): string {
-  if (text.length > MAX_EXPRESSION_LENGTH) {
-    const most = `the most is ${MAX_EXPRESSION_LENGTH}; use let names`;
-    throw new Fault('TOO_LARGE', `an expression of ${text.length} characters, ${most}`);
-  }
   const tokens: string[] = [];
   let open = 0;
   TOKEN.lastIndex = 0;

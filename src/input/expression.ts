@@ -12,7 +12,7 @@ import type { ParsedNode } from './mathjs-subset.ts';
 import { didYouMean } from './nearest.ts';
 import { commonQuantity, type Quantity, ZERO_CELSIUS } from './quantity.ts';
 import { quote } from './quote.ts';
-import { UNIT_NAMES, USUAL_UNIT_NAMES } from './unit-names.ts';
+import { UNIT_NAMES } from './unit-names.ts';
 import { OWN_UNITS } from './units.ts';
 
 /** The lazily loaded module; see `mathjs-subset.ts`. */
@@ -20,8 +20,9 @@ export type ExpressionParser = typeof import('./mathjs-subset.ts');
 
 /** Names that stand for quantities; undefined for an unknown one. */
 export interface NamedValues {
-  readonly names: Iterable<string>;
   lookUp(name: string): Quantity | undefined;
+  /** ` (did you mean "x"?)` or nothing, for a name that is no quantity */
+  suggest(name: string): string;
 }
 
 const number = (value: number): Quantity => ({
@@ -132,6 +133,5 @@ function symbol(name: string, parser: ExpressionParser, named: NamedValues): Qua
     const unit = parser.unitOf(name);
     return { value: unit.value, dimension: unit.dimension, celsius: false };
   }
-  const near = didYouMean(name, [...named.names, ...USUAL_UNIT_NAMES]);
-  throw new Fault('UNIT', `${quote(name)} is neither a unit nor a let name${near}`);
+  throw new Fault('UNIT', `${quote(name)} is neither a unit nor a let name${named.suggest(name)}`);
 }

@@ -26,7 +26,7 @@ export function reconcileGroups(
     let twin: Group | undefined;
     for (const wire of group.members) {
       const other = owner.get(wire);
-      if (other === undefined) continue;
+      if (other === undefined || other === twin) continue;
       const fault = conflict(group, other);
       if (fault !== undefined) {
         const list = (g: Group) => `${g.label} [${quoteList(g.members.map((k) => names[k]!))}]`;
@@ -42,7 +42,8 @@ export function reconcileGroups(
 }
 
 function conflict(a: Group, b: Group): string | undefined {
-  const same = a.members.length === b.members.length && a.members.every((wire) => b.members.includes(wire));
+  const members = new Set(b.members);
+  const same = a.members.length === members.size && a.members.every((wire) => members.has(wire));
   if (!same) return 'groups that share a wire must be the same list';
   if (a.members.length > 1 && a.series !== b.series) return 'a list is either in series or bonded, not both';
   return undefined;

@@ -4,24 +4,22 @@
  */
 import { findMetal, metalNames, parseWireSize } from '../model/index.ts';
 import { type Place, Problem } from '../problem.ts';
-import { identifiersOf, PARSER_WORDS } from './expression-tokens.ts';
+import { PARSER_WORDS } from './expression-tokens.ts';
 import { FAMILIES } from './families.ts';
 import { Fault, Reported } from './fault.ts';
 import { FUNCTIONS } from './functions.ts';
+import { dependencies, type LetGraph, type LetValue, letGraph } from './let-graph.ts';
 import { MAX_LET_NAMES, MAX_NAME_LENGTH } from './limits.ts';
 import { didYouMean } from './nearest.ts';
 import type { Quantity } from './quantity.ts';
 import { quote } from './quote.ts';
-import { type LetNames, quantityOf, type Reading, reportAt } from './reading.ts';
+import { type LetNames, quantityOf, type Reading, reportAt, suggest } from './reading.ts';
 import { isMapValue, valueAt } from './source.ts';
-import { UNIT_NAMES } from './unit-names.ts';
-import { plainUnits } from './unit-text.ts';
-
-type LetValue = string | number | boolean;
+import { UNIT_NAMES, USUAL_UNIT_NAMES } from './unit-names.ts';
 
 /** Names of no file, for readers before the let names are known. */
 export const NO_LETS: LetNames = {
-  names: [],
+  suggest: (name) => didYouMean(name, USUAL_UNIT_NAMES),
   lookUp: () => undefined,
   resolve: (value) => value,
 };
@@ -62,78 +60,49 @@ export function readLetNames(reading: Reading, overrides: Readonly<Record<string
     const place = { file: `--set ${name}` };
     if (!keys.includes(name)) {
       const known = keys.length === 0 ? 'the file has no let names' : `let names are ${keys.join(', ')}`;
-      reportAt(reading, 'NAME', `no let name ${quote(name)}${didYouMean(name, keys)}; ${known}`, place);
+      reportAt(reading, 'NAME', `no let name ${quote(name)}${suggest(reading, name, keys)}; ${known}`, place);
       continue;
     }
     values.set(name, value);
     places.set(name, place);
   }
-  const inCycles = reportCycles(reading, values, places);
-  return letNames(reading, values, places, inCycles);
-}
-
-/** Follows the names inside each value, depth first with an own stack. Every name on or behind a cycle is returned. */
-function reportCycles(
-  reading: Reading,
-  values: ReadonlyMap<string, LetValue>,
-  places: ReadonlyMap<string, Place>,
-): ReadonlySet<string> {
-  const uses = new Map<string, string[]>();
-  for (const [name, value] of values) {
-    const words = typeof value === 'string' ? identifiersOf(plainUnits(value)) : [];
-    uses.set(
-      name,
-      Array.from(new Set(words)).filter((word) => values.has(word)),
-    );
+  const words = new Set([...source.keys(['materials']), ...source.keys(['wires'])]);
+  const graph = letGraph(values, words);
+  for (const cycle of graph.cycles) {
+    const shown = cycle.length > 10 ? [...cycle.slice(0, 10), '..'] : cycle;
+    const text = `let names lead back to themselves: ${[...shown, cycle[0]].join(' -> ')}; give one of them a value`;
+    reportAt(reading, 'CIRCULAR', text, places.get(cycle[0]!)!);
   }
-  const state = new Map<string, 'open' | 'done'>();
-  const bad = new Set<string>();
-  for (const first of values.keys()) {
-    if (state.has(first)) continue;
-    const stack: { name: string; next: number }[] = [{ name: first, next: 0 }];
-    state.set(first, 'open');
-    while (stack.length > 0) {
-      const top = stack.at(-1)!;
-      const used = uses.get(top.name)![top.next++];
-      if (used === undefined) {
-        state.set(top.name, 'done');
-        if (uses.get(top.name)!.some((name) => bad.has(name))) bad.add(top.name);
-        stack.pop();
-      } else if (!state.has(used)) {
-        state.set(used, 'open');
-        stack.push({ name: used, next: 0 });
-      } else if (state.get(used) === 'open') {
-        const names = stack.map((entry) => entry.name);
-        const cycle = names.slice(names.indexOf(used));
-        for (const name of cycle) bad.add(name);
-        const chain = [...cycle.slice(0, 10), ...(cycle.length > 10 ? ['..'] : []), used].join(' -> ');
-        const text = `let names lead back to themselves: ${chain}; give one of them a value`;
-        reportAt(reading, 'CIRCULAR', text, places.get(used)!);
-      }
-    }
-  }
-  return bad;
+  return letNames(reading, values, places, graph);
 }
 
 function letNames(
   reading: Reading,
   values: ReadonlyMap<string, LetValue>,
   places: ReadonlyMap<string, Place>,
-  inCycles: ReadonlySet<string>,
+  graph: LetGraph,
 ): LetNames {
   const known = new Map<string, Quantity | 'failed'>();
 
   function lookUp(name: string): Quantity | undefined {
     const value = values.get(name);
     if (value === undefined) return undefined;
-    if (inCycles.has(name)) throw new Reported();
-    let quantity = known.get(name);
-    if (quantity === undefined) {
-      quantity = evaluate(name, value);
-      known.set(name, quantity);
-    }
+    if (graph.unusable.has(name)) throw new Reported();
+    // those it uses come first, so that a long chain of names is no deep recursion
+    if (!known.has(name)) for (const used of dependencies(graph, name, known)) prepare(used);
+    const quantity = known.get(name) ?? evaluate(name, value);
+    known.set(name, quantity);
     if (quantity === 'failed') throw new Reported();
     return quantity;
+  }
+
+  /** A word among the names used stays without a value; whoever needs one says so. */
+  function prepare(name: string): void {
+    try {
+      known.set(name, evaluate(name, values.get(name)!));
+    } catch (error) {
+      if (!(error instanceof Fault)) throw error;
+    }
   }
 
   function evaluate(name: string, value: LetValue): Quantity | 'failed' {
@@ -160,12 +129,13 @@ function letNames(
     for (let step = 0; step <= values.size && typeof current === 'string'; step++) {
       const name = current.trim();
       if (!values.has(name)) return current;
-      if (inCycles.has(name)) return undefined;
+      if (graph.unusable.has(name)) return undefined;
       current = values.get(name);
     }
     return current;
   }
 
-  const api: LetNames = { names: Array.from(values.keys()), lookUp, resolve };
+  const suggestFor = (name: string) => suggest(reading, name, [...values.keys(), ...USUAL_UNIT_NAMES]);
+  const api: LetNames = { lookUp, suggest: suggestFor, resolve };
   return api;
 }

@@ -13,7 +13,7 @@ export const MAX_TOKENS = 500_000;
 export const MAX_DEPTH = 40;
 
 /** Values after aliases are replaced by what they stand for. */
-export const MAX_VALUES = 400_000;
+export const MAX_VALUES = 250_000;
 
 /** `let` names of one file. */
 export const MAX_LET_NAMES = 1000;
@@ -41,6 +41,9 @@ export const MAX_WIRES = 2000;
 
 /** Frequencies of one case. */
 export const MAX_FREQUENCIES = 100_000;
+
+/** Unknown names of one file for which the nearest known one is looked up: each look-up walks all names. */
+export const MAX_SUGGESTIONS = 20;
 
 /** Problems listed for one file; a last line counts the others. */
 export const MAX_PROBLEMS = 200;

@@ -2,9 +2,8 @@
 import type { Loop, LumpedExtra } from '../model/index.ts';
 import { type Group, reconcileGroups } from './groups.ts';
 import { readNames } from './names.ts';
-import { didYouMean } from './nearest.ts';
 import { quote } from './quote.ts';
-import { label, type Range, type Reading, readFlag, readQuantity, report } from './reading.ts';
+import { label, type Range, type Reading, readFlag, readQuantity, report, suggest } from './reading.ts';
 import { isMapValue, type Path, valueAt } from './source.ts';
 
 const RESISTANCE: Range = { min: 0, max: 1e12, text: '0 to 1e12 ohm' };
@@ -60,7 +59,7 @@ export function readLoops(reading: Reading, names: readonly string[]): LoopsAndB
 function readWireList(reading: Reading, path: Path, index: ReadonlyMap<string, number>): number[] {
   const written = valueAt(reading.source.data, path);
   const list = Array.isArray(written) ? written : [written];
-  const members: number[] = [];
+  const members = new Set<number>();
   list.forEach((item, k) => {
     // a wire of that name comes before a let name
     const name = index.has(String(item)) ? item : reading.lets.resolve(item);
@@ -68,14 +67,14 @@ function readWireList(reading: Reading, path: Path, index: ReadonlyMap<string, n
     const itemPath = Array.isArray(written) ? [...path, k] : path;
     const wire = index.get(String(name).trim());
     if (wire === undefined) reportUnknown(reading, String(name).trim(), index, itemPath);
-    else if (members.includes(wire)) {
+    else if (members.has(wire)) {
       report(reading, 'DUPLICATE', `wire ${quote(name)} stands twice in one list; remove one`, itemPath);
-    } else members.push(wire);
+    } else members.add(wire);
   });
   if (Array.isArray(written) && written.length === 0) {
     report(reading, 'EMPTY_LOOP', `${label(path)} is an empty list; name at least one wire`, path);
   }
-  return members;
+  return Array.from(members);
 }
 
 function reportUnknown(reading: Reading, name: string, index: ReadonlyMap<string, number>, path: Path): void {
@@ -85,14 +84,14 @@ function reportUnknown(reading: Reading, name: string, index: ReadonlyMap<string
   }
   // members of bundles come from a section that is refused as a whole
   if (isMapValue(valueAt(reading.source.data, ['bundles']))) return;
-  const near = didYouMean(name, index.keys());
+  const near = suggest(reading, name, index.keys());
   report(reading, 'UNKNOWN_WIRE', `no wire ${quote(name)}${near}; name one of wires`, path);
 }
 
 /** @returns false for a wire on both sides, which no further check can add to */
 function checkSides(reading: Reading, name: string, go: Group, back: Group): boolean {
-  const shared = go.members.filter((wire) => back.members.includes(wire));
-  if (shared.length > 0) {
+  const returning = new Set(back.members);
+  if (go.members.some((wire) => returning.has(wire))) {
     const text = `loop ${quote(name)} has a wire on both sides; remove it from go or from return`;
     report(reading, 'BOTH_SIDES', text, back.path);
     return false;

@@ -1,9 +1,8 @@
 /** Own metals of a file, and the choice of a metal by name. */
 import { findMetal, type Metal, metalNames } from '../model/index.ts';
 import { readNames } from './names.ts';
-import { didYouMean } from './nearest.ts';
 import { quote } from './quote.ts';
-import { type Range, type Reading, readQuantity, readText, report, reportAt } from './reading.ts';
+import { type Range, type Reading, readQuantity, readText, report, reportAt, suggest } from './reading.ts';
 import { isMapValue, type Path, valueAt } from './source.ts';
 
 /** From better than the purest metal near absolute zero to worse than graphite. */
@@ -95,7 +94,7 @@ export function readMaterialName(reading: Reading, path: Path, materials: Materi
   if (found === undefined) {
     const known = [...materials.keys(), ...metalNames()];
     const list = `known are ${known.slice(0, 30).join(', ')}`;
-    const text = `no material ${quote(name)}${didYouMean(name, known)}; ${list}, or define it under materials`;
+    const text = `no material ${quote(name)}${suggest(reading, name, known)}; ${list}, or define it under materials`;
     report(reading, 'UNKNOWN_MATERIAL', text, path);
   }
   return found;

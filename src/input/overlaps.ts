@@ -33,29 +33,47 @@ function overlap(a: Wire, b: Wire): { code: 'OVERLAP' | 'RANGE'; text: string } 
   const metal = a.radius + b.radius;
   const least = 2 * SMALLEST_GAP * Math.min(a.radius, b.radius);
   const gap = distance - metal;
-  const pair = `wires ${quote(a.name)} and ${quote(b.name)} are ${millimetres(distance)} apart`;
+  const pair = (length: string) => `wires ${quote(a.name)} and ${quote(b.name)} are ${length} apart`;
   if (gap < -ROUNDING * metal) {
-    const text = `${pair} and their radii add to ${millimetres(metal)}; move one, or reduce a diameter`;
+    const [apart, sum] = differing(distance, metal);
+    const text = `${pair(apart)} and their radii add to ${sum}; move one, or reduce a diameter`;
     return { code: 'OVERLAP', text };
   }
   if (gap < least - ROUNDING * metal) {
-    const text = `${pair} and leave a gap of ${millimetres(Math.max(gap, 0))}; the smallest is ${millimetres(least)}, ${SMALLEST_GAP} of the smaller diameter; move one`;
-    return { code: 'OVERLAP', text };
+    const found = millimetres(Math.max(gap, 0));
+    const wanted = `the smallest is ${millimetres(least)}, ${SMALLEST_GAP} of the smaller diameter`;
+    return {
+      code: 'OVERLAP',
+      text: `${pair(millimetres(distance))} and leave a gap of ${found}; ${wanted}; move one`,
+    };
   }
   const insulated = metal + a.insulation + b.insulation;
   if (distance < insulated * (1 - ROUNDING)) {
-    const text = `${pair} and their radii with insulation add to ${millimetres(insulated)}; move one, or thin an insulation`;
+    const [apart, sum] = differing(distance, insulated);
+    const text = `${pair(apart)} and their radii with insulation add to ${sum}; move one, or thin an insulation`;
     return { code: 'OVERLAP', text };
   }
   const far = Math.max(Math.abs(a.x), Math.abs(a.y), Math.abs(b.x), Math.abs(b.y));
   if (far * Number.EPSILON > GAP_ROUNDING * gap) {
-    const text = `${pair}, too far from the origin (${millimetres(far)}) to hold their gap of ${millimetres(gap)}; move the drawing to the origin`;
-    return { code: 'RANGE', text };
+    const where = `too far from the origin (${millimetres(far)}) to hold their gap of ${millimetres(gap)}`;
+    return {
+      code: 'RANGE',
+      text: `${pair(millimetres(distance))}, ${where}; move the drawing to the origin`,
+    };
   }
   return undefined;
 }
 
-/** `1.88 mm`, with the digits that tell a small gap from none. */
-function millimetres(metres: number): string {
-  return `${Number((metres * 1e3).toPrecision(6))} mm`;
+/** Digits to show until two lengths differ; ROUNDING makes them differ in the last. */
+const DIGITS = [6, 8, 10, 12];
+
+/** Two lengths with as many digits as it takes to see which is the longer. */
+function differing(a: number, b: number): [string, string] {
+  const digits = DIGITS.find((n) => millimetres(a, n) !== millimetres(b, n));
+  return [millimetres(a, digits), millimetres(b, digits)];
+}
+
+/** `1.88 mm` */
+function millimetres(metres: number, digits = DIGITS[0]!): string {
+  return `${Number((metres * 1e3).toPrecision(digits))} mm`;
 }

@@ -1,8 +1,7 @@
 /** Centres of the wires: coordinates, or distance and angle from another wire, or touching it. */
 import type { Caution } from '../problem.ts';
-import { didYouMean } from './nearest.ts';
 import { quote, quoteList } from './quote.ts';
-import { type Range, type Reading, readFlag, readQuantity, readText, report } from './reading.ts';
+import { type Range, type Reading, readFlag, readQuantity, readText, report, suggest } from './reading.ts';
 import { isMapValue, type Path, valueAt } from './source.ts';
 import type { WireDraft } from './wires.ts';
 
@@ -148,7 +147,7 @@ function readAt(
   }
   if (from === undefined || angle === undefined || (!touching && distance === undefined)) return undefined;
   if (!byName.has(from)) {
-    const near = didYouMean(from, byName.keys());
+    const near = suggest(reading, from, byName.keys());
     report(reading, 'UNKNOWN_WIRE', `no wire ${quote(from)} to stand from${near}`, key('from'));
     return undefined;
   }

@@ -7,6 +7,8 @@ import { type ErrorCode, type Place, Problem } from '../problem.ts';
 import { type ExpressionParser, evaluateExpression, type NamedValues } from './expression.ts';
 import { FAMILIES, type Family } from './families.ts';
 import { Fault, NeedsExpressions, Reported } from './fault.ts';
+import { MAX_EXPRESSION_LENGTH } from './limits.ts';
+import { didYouMean } from './nearest.ts';
 import { commonQuantity, type Quantity, valueIn } from './quantity.ts';
 import { quote } from './quote.ts';
 import { type Path, type Source, valueAt } from './source.ts';
@@ -23,6 +25,15 @@ export interface Reading {
   readonly problems: Problem[];
   readonly parser: ExpressionParser | undefined;
   lets: LetNames;
+  /** look-ups of a nearest name that may still be made */
+  suggestionsLeft: number;
+}
+
+/** ` (did you mean "x"?)` or nothing; nothing too after the first unknown names of a file. */
+export function suggest(reading: Reading, word: string, known: Iterable<string>): string {
+  if (reading.suggestionsLeft <= 0) return '';
+  reading.suggestionsLeft--;
+  return didYouMean(word, known);
 }
 
 /** Adds a problem at the value of a path. */
@@ -45,6 +56,10 @@ export interface Range {
 
 /** Quantity behind a text. Throws Fault, Reported or NeedsExpressions. */
 export function quantityOf(text: string, parser: ExpressionParser | undefined, named: NamedValues): Quantity {
+  if (text.length > MAX_EXPRESSION_LENGTH) {
+    const most = `the most is ${MAX_EXPRESSION_LENGTH}; use let names`;
+    throw new Fault('TOO_LARGE', `an expression of ${text.length} characters, ${most}`);
+  }
   const plain = plainUnits(text);
   if (/^[+-]?\.?(nan|inf|infinity)$/i.test(plain)) {
     throw new Fault('RANGE', `${quote(text)} is not a finite number; give one`);
@@ -121,7 +136,12 @@ export function readCount(reading: Reading, path: Path, range: Range): number | 
 /** A text at a path, let names replaced; numbers count as their digits. */
 export function readText(reading: Reading, path: Path): string | undefined {
   const value = wordAt(reading, path);
-  return typeof value === 'string' || typeof value === 'number' ? String(value).trim() : undefined;
+  if (typeof value !== 'string' && typeof value !== 'number') return undefined;
+  const text = String(value).trim();
+  if (text.length <= MAX_EXPRESSION_LENGTH) return text;
+  const most = `the most is ${MAX_EXPRESSION_LENGTH}`;
+  report(reading, 'TOO_LARGE', `${label(path)}: a text of ${text.length} characters; ${most}`, path);
+  return undefined;
 }
 
 /** true or false at a path; undefined where it is missing or wrong (then reported). */

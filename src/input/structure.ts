@@ -27,7 +27,8 @@ function toProblems(issue: Issue, outer: Path, source: Source): Problem[] {
   }
   if (issue.code === 'invalid_union') {
     const branch = likeliestBranch(issue.errors);
-    if (branch !== undefined) return branch.flatMap((inner) => toProblems(inner, path, source));
+    if (branch !== undefined)
+      return branch.slice(0, MOST_ISSUES).flatMap((inner) => toProblems(inner, path, source));
   }
   const value = valueAt(source.data, path);
   const found = describeValue(value);

@@ -1,5 +1,5 @@
 /** Wires of a file: size, metal, temperature, insulation. Where they stand is `placement.ts`. */
-import { parseWireSize } from '../model/index.ts';
+import { parseWireSize, resistivityAt } from '../model/index.ts';
 import type { Caution } from '../problem.ts';
 import { isLaterKey } from './later-keys.ts';
 import { MAX_WIRES } from './limits.ts';
@@ -184,13 +184,20 @@ function cautionsOf(reading: Reading, wires: readonly WireDraft[]): Caution[] {
     if (text !== undefined) texts.add(text);
   }
   for (const text of texts) cautions.push({ code: 'TEMPERATURE_RANGE', text });
-  const strands = wires.filter(
-    (w) => valueAt(reading.source.data, ['wires', w.name, 'stranded']) !== undefined,
-  );
+  const strands = wires.filter((wire) => isStrand(reading, wire));
   if (strands.length > 0) {
     const names = quoteList(strands.map((w) => w.name));
-    const text = `${names}: a strand taken as one round wire of its outer diameter with the resistance of its metal area (no lay); currents between its strands are not modelled`;
+    const text = `${names}: a strand taken as one round wire of its outer diameter and of its resistance (no lay is added); currents between its strands are not modelled`;
     cautions.push({ code: 'STRAND_AS_WIRE', text });
   }
   return cautions;
+}
+
+/** [1] resistance above that of solid metal by more than purity and tolerance explain: the wire is a strand. */
+const STRAND_RATIO = 1.05;
+
+function isStrand(reading: Reading, wire: WireDraft): boolean {
+  if (valueAt(reading.source.data, ['wires', wire.name, 'stranded']) !== undefined) return true;
+  if (wire.conductivity === undefined || wire.material === undefined) return false;
+  return wire.conductivity * resistivityAt(wire.material, wire.temperature) < 1 / STRAND_RATIO;
 }

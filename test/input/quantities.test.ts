@@ -339,6 +339,9 @@ describe('hostile texts', () => {
     'sqrt('.repeat(200),
     '1 '.repeat(150),
     `${'1*'.repeat(199)}1 mm`,
+    `${'9'.repeat(5_000_000)}!`,
+    `${' '.repeat(5_000_000)}!`,
+    `1${' °'.repeat(2_000_000)}`,
   ];
   it.each(hostile)('%.30s', async (text) => {
     const start = performance.now();
