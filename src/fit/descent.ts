@@ -31,6 +31,8 @@ const NARROWEST_BOX = 1e-9;
 const LEAST_GAIN = 1e-5;
 /** Relative errors of this size are rounding of the sums behind them. */
 const ROUNDING = 1e-13;
+/** L_inf below this part of L at the top of the band is zero: it would be an element of rounding size. */
+const LEAST_INDUCTANCE = 1e-12;
 /**
  * Poles stay within this factor of the band: beyond, a section is a plain resistor or inductor to more
  * digits than matter.
@@ -130,7 +132,7 @@ function trustBox(target: Target, parameters: Parameters, unit: number, size: nu
 
 function moved(parameters: Parameters, step: Float64Array, unit: number): Parameters {
   const last = parameters.length - 1;
-  return parameters.map((value, j) =>
-    j < last ? value * Math.exp(step[j]) : Math.max(0, value + unit * step[j]),
-  );
+  const next = parameters.map((value, j) => (j < last ? value * Math.exp(step[j]) : value + unit * step[j]));
+  if (next[last] < LEAST_INDUCTANCE * unit) next[last] = 0;
+  return next;
 }

@@ -4,7 +4,7 @@
  */
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
-import { fitSections, type SectionCircuit, sectionImpedance } from '../../src/fit/index.ts';
+import { fitFrequencies, fitSections, type SectionCircuit, sectionImpedance } from '../../src/fit/index.ts';
 import { pairSamples, STEEL, seriesOfPairs, THIN_COPPER } from './wide-pair.ts';
 
 const positive = (low: number, high: number) =>
@@ -61,6 +61,44 @@ describe('any circuit', () => {
     const { resistance, inductance } = sectionImpedance(circuit, 1e5);
     expect(resistance).toBeCloseTo(2 + (5 * x * x) / (25 + x * x), 13);
     expect(w * inductance).toBeCloseTo(w * 3e-6 + (25 * x) / (25 + x * x), 13);
+  });
+});
+
+describe('details that later work rests on', () => {
+  test('the small rise of R far below a corner keeps its digits', () => {
+    const circuit = {
+      resistanceDc: 0,
+      inductanceInfinity: 1e-6,
+      sections: [{ resistance: 4, inductance: 1e-6 }],
+    };
+    // R_k u^2 / (1 + u^2), u = w L_k / R_k
+    for (const f of [1e-3, 1, 1e3]) {
+      const u = (2 * Math.PI * f * 1e-6) / 4;
+      expect(sectionImpedance(circuit, f).resistance / (4 * u * u)).toBeCloseTo(1 / (1 + u * u), 14);
+    }
+  });
+
+  test('L_inf stays at zero where less would fit better', () => {
+    const circuit: SectionCircuit = {
+      resistanceDc: 0.01,
+      inductanceInfinity: 0,
+      sections: [1, 10].map((r) => ({ resistance: r, inductance: 1e-7 })),
+    };
+    const frequency = fitFrequencies(1e3, 1e9).frequency;
+    const values = Array.from(frequency, (f) => sectionImpedance(circuit, f));
+    // L falls faster than any circuit can: pulled down by up to half at the top of the band
+    const samples = {
+      frequency,
+      resistance: Float64Array.from(values, (v) => v.resistance),
+      inductance: Float64Array.from(values, (v, i) => v.inductance * (1 - i / 2 / frequency.length)),
+      resistanceDc: 0.01,
+    };
+    for (const sections of [1, 2, 3]) {
+      const model = fitSections(samples, { sections });
+      expect(model.inductanceInfinity).toBeGreaterThanOrEqual(0);
+      for (const f of [1e8, 1e9, 1e11]) expect(sectionImpedance(model, f).inductance).toBeGreaterThan(0);
+    }
+    expect(fitSections(samples, { sections: 2 }).inductanceInfinity).toBe(0);
   });
 });
 

@@ -55,6 +55,19 @@ describe(`linear minimax step against ${fixture.source}`, () => {
     }
   });
 
+  test('a held set that is of no use here is passed over', () => {
+    for (const stored of fixture.problems) {
+      const problem = problemOf(stored);
+      // the upper sides of the first errors, and all of them at once, whatever their slopes
+      const useless = Int32Array.from(
+        { length: stored.low.length + 1 },
+        (_, k) => 2 * (k % stored.errors.length),
+      );
+      const { worst } = minimaxStep(problem, useless);
+      expect(worst - stored.worst).toBeLessThan(3e-6 * Math.max(...stored.errors.map(Math.abs)));
+    }
+  });
+
   test('one variable, by hand: |1 - d| and |d| meet at one half; a box of 0.2 stops at 0.8', () => {
     const errors = Float64Array.from([1, 0]);
     const slopes = Float64Array.from([-1, 1]);

@@ -47,3 +47,8 @@ export function simulate(netlist: string, circuit: readonly string[], vector: st
     rmSync(folder, { recursive: true, force: true });
   }
 }
+
+/** The error that the header states, as a part of 1. */
+export function statedError(netlist: string, quantity: 'R' | 'L'): number {
+  return Number(new RegExp(`worst error of ${quantity}: ([\\d.e-]+) %`).exec(netlist)![1]) / 100;
+}

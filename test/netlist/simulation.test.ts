@@ -16,7 +16,7 @@ import {
   THIN_COPPER,
   type WidePair,
 } from '../fit/wide-pair.ts';
-import { simulate, skipWithoutNgspice } from './ngspice.ts';
+import { simulate, skipWithoutNgspice, statedError } from './ngspice.ts';
 import { fixedTalbot, sineIntegral, stepFromRealPart } from './transforms.ts';
 
 const LENGTH = 12;
@@ -31,11 +31,6 @@ function netlistOf(pairs: readonly WidePair[], from: number, to: number, within:
     length: LENGTH,
     version: 'test',
   });
-}
-
-/** The error that the header states, as a part of 1. */
-function statedError(netlist: string, quantity: 'R' | 'L'): number {
-  return Number(new RegExp(`worst error of ${quantity}: ([\\d.e-]+) %`).exec(netlist)![1]) / 100;
 }
 
 describe('the transforms', () => {
