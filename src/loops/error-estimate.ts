@@ -21,7 +21,7 @@ export interface InductanceError {
 const COUPLING = 3;
 
 /** [1] rounding of a sum of a few hundred terms in units of its largest */
-const ROUNDING = 2e-15;
+const ROUNDING = 1e-14;
 
 export function inductanceError(
   point: FrequencyPoint,

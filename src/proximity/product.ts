@@ -7,6 +7,7 @@
  */
 import type { ComplexVector } from '../complex/index.ts';
 import type { Layout } from './layout.ts';
+import type { TranslationTable } from './translation.ts';
 
 /** Scratch of one product, reused. */
 export interface ProductScratch {
@@ -61,7 +62,7 @@ export function translate(
     rotate(x, offsets[j], modes, phaseJ, columns, inJ);
     outJ.fill(0, 0, 4 * columns);
     // inI turns into the incoming amplitudes of i row by row: row n is read before it is overwritten.
-    multiplyBothWays(table.values, table.start, table.width, rows, columns, inI, inJ, outJ);
+    multiplyBothWays(table, rows, columns, inI, inJ, outJ);
     rotateAndAdd(inI, offsets[i], modes, phaseI, rows, out);
     rotateAndAdd(outJ, offsets[j], modes, phaseJ, columns, out);
   }
@@ -92,15 +93,14 @@ function rotate(
 }
 
 function multiplyBothWays(
-  values: Float64Array,
-  start: Int32Array,
-  width: Int32Array,
+  table: TranslationTable,
   rows: number,
   columns: number,
   inI: Float64Array,
   inJ: Float64Array,
   outJ: Float64Array,
 ): void {
+  const { values, start, first } = table;
   for (let n = 0, k = 0; n < rows; n++, k += 4) {
     const a0 = inI[k];
     const a1 = inI[k + 1];
@@ -111,8 +111,8 @@ function multiplyBothWays(
     let s2 = 0;
     let s3 = 0;
     const from = start[n];
-    const end = from + Math.min(width[n], columns);
-    for (let at = from, m = 0; at < end; at++, m += 4) {
+    const end = Math.min(start[n + 1], from + columns - first[n]);
+    for (let at = from, m = 4 * first[n]; at < end; at++, m += 4) {
       const t = values[at];
       s0 += t * inJ[m];
       s1 += t * inJ[m + 1];

@@ -8,15 +8,15 @@
  * (u+v)^(n+m) < 1, no overflow at any order; what underflows is negligible.
  */
 
-/** Entries n <= orders of i, m <= orders of j, cut where they can not matter. */
+/** Entries n <= orders of i, m <= orders of j: in each row the band of m that can matter. */
 export interface TranslationTable {
   /** highest n kept */
   readonly rows: number;
   /** highest m kept */
   readonly columns: number;
-  /** entries kept in row n-1: orders m = 1 .. width, never growing with n */
-  readonly width: Int32Array;
-  /** start of row n-1 in `values` */
+  /** first m kept in row n-1, less one */
+  readonly first: Int32Array;
+  /** start of row n-1 in `values`; one more entry ends the last row */
   readonly start: Int32Array;
   /** [1] t_nm, row after row */
   readonly values: Float64Array;
@@ -43,40 +43,43 @@ const NEGLIGIBLE = 1e-15;
 export function translationTable(o: TranslationOptions): TranslationTable {
   const { u, v } = o;
   const most = o.ordersJ;
-  const width = new Int32Array(o.ordersI);
-  const start = new Int32Array(o.ordersI);
+  const first = new Int32Array(o.ordersI);
+  const start = new Int32Array(o.ordersI + 1);
   const falling = new Float64Array(most + 1);
   for (let m = 1; m <= most; m++) falling[m] = Math.exp(-o.alphaJ * m);
   // p(n-1, m-1) over m for the current n
   const p = new Float64Array(most + 1);
   p[0] = 1;
   for (let m = 1; m <= most; m++) p[m] = p[m - 1] * v;
+  const row = new Float64Array(most);
   const chunks: Float64Array[] = [];
-  let total = 0;
+  let columns = 0;
   let rows = 0;
-  let previous = most;
   for (let n = 1; n <= o.ordersI; n++) {
     if (n > 1) {
       p[0] *= u;
       for (let m = 1; m <= most; m++) p[m] = u * p[m] + v * p[m - 1];
     }
-    const row = new Float64Array(previous);
     const fallingI = Math.exp(-o.alphaI * n);
-    let kept = 0;
-    for (let m = 1; m <= previous; m++) {
+    let from = -1;
+    let to = 0;
+    for (let m = 1; m <= most; m++) {
       const t = (p[m - 1] * u * v * (n + m - 1)) / Math.sqrt(n * m);
       row[m - 1] = t;
-      if (t * falling[m] * fallingI > NEGLIGIBLE) kept = m;
+      if (t * falling[m] * fallingI > NEGLIGIBLE) {
+        if (from < 0) from = m - 1;
+        to = m;
+      }
     }
-    if (kept === 0) break;
-    width[n - 1] = kept;
-    start[n - 1] = total;
-    chunks.push(row.subarray(0, kept));
-    total += kept;
-    previous = kept;
+    // The largest entry of a row falls with n: u/(1-v) < 1.
+    if (from < 0) break;
+    first[n - 1] = from;
+    start[n] = start[n - 1] + to - from;
+    chunks.push(row.slice(from, to));
+    columns = Math.max(columns, to);
     rows = n;
   }
-  const values = new Float64Array(total);
+  const values = new Float64Array(start[rows]);
   for (let n = 0; n < rows; n++) values.set(chunks[n], start[n]);
-  return { rows, columns: rows === 0 ? 0 : width[0], width, start, values };
+  return { rows, columns, first, start, values };
 }
