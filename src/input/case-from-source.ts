@@ -91,6 +91,15 @@ function readAll(
   const frequencies = readFrequencies(reading);
   const title = readTitle(reading);
   if (reading.problems.length > 0) return { problems: inOrder(reading.problems) };
+  const whole = wires.length === names.length && wires.every((wire) => wire.conductivity > 0);
+  if (!whole || frequencies.length === 0 || loops.some((loop) => loop.go.length * loop.return.length === 0)) {
+    // a reader passed over a value without a word; better no result than one of half a file
+    throw new Problem(
+      'INTERNAL',
+      'a part of the file was not understood, and no problem found',
+      source.place([]),
+    );
+  }
   const cautions = [...drafts.cautions, ...placement.cautions];
   return {
     case: {
@@ -109,7 +118,8 @@ function readAll(
 /** One line, whatever stood there: it goes into headers of results. */
 function readTitle(reading: Reading): string {
   const value = valueAt(reading.source.data, ['title']);
-  const title = value === undefined || value === null ? '' : String(value).replace(/\s+/g, ' ').trim();
+  const title =
+    typeof value !== 'string' && typeof value !== 'number' ? '' : String(value).replace(/\s+/g, ' ').trim();
   if (title.length > MAX_TITLE_LENGTH) {
     report(reading, 'RANGE', `a title of ${title.length} characters; the most is ${MAX_TITLE_LENGTH}`, [
       'title',

@@ -1,7 +1,7 @@
 /** Frequencies of a file: a list, or a range on a log or linear scale with both ends kept. */
 import { MAX_FREQUENCIES } from './limits.ts';
 import { type Range, type Reading, readCount, readQuantity, readText, report } from './reading.ts';
-import { isMapValue, type Path, valueAt } from './source.ts';
+import { isGiven, isMapValue, type Path, valueAt } from './source.ts';
 
 /** Up to where the internal impedance is tested. */
 const FREQUENCY: Range = { min: 0, max: 1e12, text: '0 Hz to 1 THz' };
@@ -51,7 +51,7 @@ function readRange(reading: Reading, path: Path, written: Record<string, unknown
   const perDecade = readCount(reading, key('per_decade'), COUNT);
   const count = readCount(reading, key('count'), COUNT);
   const scale = readText(reading, key('scale')) ?? 'log';
-  if ('per_decade' in written && 'count' in written) {
+  if (isGiven(written, 'per_decade') && isGiven(written, 'count')) {
     report(reading, 'WRONG_TYPE', 'per_decade and count exclude each other; give one', key('count'));
     return [];
   }
@@ -59,7 +59,7 @@ function readRange(reading: Reading, path: Path, written: Record<string, unknown
     report(reading, 'WRONG_TYPE', `scale is ${scale}; it must be log or linear`, key('scale'));
     return [];
   }
-  if (scale === 'linear' && !('count' in written)) {
+  if (scale === 'linear' && !isGiven(written, 'count')) {
     report(reading, 'MISSING', 'a linear scale needs count: the number of points', path);
     return [];
   }
@@ -74,7 +74,7 @@ function readRange(reading: Reading, path: Path, written: Record<string, unknown
     report(reading, 'RANGE', text, key('from'));
     return [];
   }
-  if ('count' in written) {
+  if (isGiven(written, 'count')) {
     if (count === undefined) return [];
     if (count === 1 && from !== to) {
       report(reading, 'RANGE', 'count: 1 can not keep both ends; give at least 2', key('count'));
@@ -82,7 +82,7 @@ function readRange(reading: Reading, path: Path, written: Record<string, unknown
     }
     return scale === 'linear' ? linearByCount(from, to, count) : logByCount(from, to, count);
   }
-  if ('per_decade' in written && perDecade === undefined) return [];
+  if (isGiven(written, 'per_decade') && perDecade === undefined) return [];
   const points = logByDecade(from, to, perDecade ?? DEFAULT_PER_DECADE);
   if (points !== undefined) return points;
   report(reading, 'TOO_LARGE', `over ${MAX_FREQUENCIES} frequencies; lower per_decade`, key('per_decade'));

@@ -62,8 +62,9 @@ function readWireList(reading: Reading, path: Path, index: ReadonlyMap<string, n
   const members = new Set<number>();
   list.forEach((item, k) => {
     // a wire of that name comes before a let name
-    const name = index.has(String(item)) ? item : reading.lets.resolve(item);
-    if (typeof name !== 'string' && typeof name !== 'number') return;
+    const name = typeof item === 'string' && index.has(item) ? item : reading.lets.resolve(item);
+    // wrong kinds and circular let names were reported
+    if ((typeof item !== 'string' && typeof item !== 'number') || name === undefined) return;
     const itemPath = Array.isArray(written) ? [...path, k] : path;
     const wire = index.get(String(name).trim());
     if (wire === undefined) reportUnknown(reading, String(name).trim(), index, itemPath);

@@ -3,7 +3,7 @@ import { findMetal, type Metal, metalNames } from '../model/index.ts';
 import { readNames } from './names.ts';
 import { quote } from './quote.ts';
 import { type Range, type Reading, readQuantity, readText, report, reportAt, suggest } from './reading.ts';
-import { isMapValue, type Path, valueAt } from './source.ts';
+import { isGiven, isMapValue, type Path, valueAt } from './source.ts';
 
 /** From better than the purest metal near absolute zero to worse than graphite. */
 const RESISTIVITY: Range = { min: 1e-13, max: 1, text: '1e-13 to 1 ohm m' };
@@ -47,8 +47,8 @@ function readMaterial(reading: Reading, name: string): Material | undefined {
   if (!isMapValue(written)) return undefined;
   const conductivity = readQuantity(reading, [...path, 'conductivity'], 'conductivity', CONDUCTIVITY);
   const resistivity = readQuantity(reading, [...path, 'resistivity'], 'resistivity', RESISTIVITY);
-  const both = 'conductivity' in written && 'resistivity' in written;
-  const none = !('conductivity' in written) && !('resistivity' in written);
+  const both = isGiven(written, 'conductivity') && isGiven(written, 'resistivity');
+  const none = !isGiven(written, 'conductivity') && !isGiven(written, 'resistivity');
   if (both) {
     report(reading, 'WRONG_TYPE', `material ${quote(name)} has conductivity and resistivity; give one`, [
       ...path,

@@ -2,7 +2,7 @@
 import type { Caution } from '../problem.ts';
 import { quote, quoteList } from './quote.ts';
 import { type Range, type Reading, readFlag, readQuantity, readText, report, suggest } from './reading.ts';
-import { isMapValue, type Path, valueAt } from './source.ts';
+import { isGiven, isMapValue, type Path, valueAt } from './source.ts';
 import type { WireDraft } from './wires.ts';
 
 /**
@@ -132,17 +132,16 @@ function readAt(
   }
   if (!isMapValue(written)) return undefined;
   const from = readOrigin(reading, key('from'), byName);
-  const angle = 'angle' in written ? readQuantity(reading, key('angle'), 'angle') : 0;
+  const angle = isGiven(written, 'angle') ? readQuantity(reading, key('angle'), 'angle') : 0;
   const distance = readQuantity(reading, key('distance'), 'length', DISTANCE);
-  const touching = readFlag(reading, key('touching')) ?? false;
-  if (touching && 'distance' in written) {
+  const touching = readFlag(reading, key('touching'));
+  if (touching === undefined) return undefined;
+  if (touching && isGiven(written, 'distance')) {
     report(reading, 'WRONG_TYPE', 'touching and distance exclude each other; give one', key('distance'));
     return undefined;
   }
-  if (!touching && !('distance' in written)) {
-    if (!('touching' in written) || written.touching === false) {
-      report(reading, 'MISSING', 'at: no distance; give distance: 5 mm, or touching: true', path);
-    }
+  if (!touching && !isGiven(written, 'distance')) {
+    report(reading, 'MISSING', 'at: no distance; give distance: 5 mm, or touching: true', path);
     return undefined;
   }
   if (from === undefined || angle === undefined || (!touching && distance === undefined)) return undefined;
@@ -160,8 +159,8 @@ function readOrigin(
   path: Path,
   byName: ReadonlyMap<string, WireDraft>,
 ): string | undefined {
-  const typed = String(valueAt(reading.source.data, path));
-  return byName.has(typed) ? typed : readText(reading, path);
+  const typed = valueAt(reading.source.data, path);
+  return typeof typed === 'string' && byName.has(typed) ? typed : readText(reading, path);
 }
 
 function smallestGapCaution(names: readonly string[]): Caution[] {

@@ -110,7 +110,7 @@ export function readQuantity(
 ): number | undefined {
   const typed = valueAt(reading.source.data, path);
   const value = reading.lets.resolve(typed);
-  if (typeof value !== 'number' && typeof value !== 'string') return undefined;
+  if (typeof typed !== 'number' && typeof typed !== 'string') return undefined;
   return guard(reading, path, () => {
     const text = shown(typed, value);
     const quantity =
@@ -135,8 +135,9 @@ export function readCount(reading: Reading, path: Path, range: Range): number | 
 
 /** A text at a path, let names replaced; numbers count as their digits. */
 export function readText(reading: Reading, path: Path): string | undefined {
-  const value = wordAt(reading, path);
-  if (typeof value !== 'string' && typeof value !== 'number') return undefined;
+  const typed = valueAt(reading.source.data, path);
+  const value = reading.lets.resolve(typed);
+  if ((typeof typed !== 'string' && typeof typed !== 'number') || value === undefined) return undefined;
   const text = String(value).trim();
   if (text.length <= MAX_EXPRESSION_LENGTH) return text;
   const most = `the most is ${MAX_EXPRESSION_LENGTH}`;
@@ -144,12 +145,13 @@ export function readText(reading: Reading, path: Path): string | undefined {
   return undefined;
 }
 
-/** true or false at a path; undefined where it is missing or wrong (then reported). */
+/** true or false at a path, false where it is missing; undefined where it is wrong (then reported). */
 export function readFlag(reading: Reading, path: Path): boolean | undefined {
+  if (valueAt(reading.source.data, path) === undefined) return false;
   const value = wordAt(reading, path);
   if (value === undefined || value === null || typeof value === 'boolean') return value ?? undefined;
   if (value === 'true' || value === 'false') return value === 'true';
-  if (typeof value === 'string') {
+  if (typeof value !== 'object') {
     report(reading, 'WRONG_TYPE', `${label(path)}: ${quote(value)} is neither true nor false`, path);
   }
   return undefined;

@@ -30,6 +30,11 @@ export function isMapValue(value: unknown): value is Record<string, unknown> {
   return value !== null && typeof value === 'object' && !Array.isArray(value);
 }
 
+/** True when the key is there; in data built in code, undefined counts as not there. */
+export function isGiven(map: Record<string, unknown>, key: string): boolean {
+  return Object.hasOwn(map, key) && map[key] !== undefined;
+}
+
 /** A case built in code: places are the path itself, or what `names` calls it (an option of a command). */
 export function plainSource(data: unknown, names: ReadonlyMap<string, string> = new Map()): Source {
   const place = (path: Path): Place => {

@@ -6,8 +6,8 @@ import { MAX_WIRES } from './limits.ts';
 import { type Material, type Materials, readMaterialName, TEMPERATURE } from './materials.ts';
 import { readNames } from './names.ts';
 import { quote, quoteList } from './quote.ts';
-import { type Range, type Reading, readQuantity, report, reportAt, wordAt } from './reading.ts';
-import { isMapValue, type Path, valueAt } from './source.ts';
+import { type Range, type Reading, readQuantity, readText, report, reportAt } from './reading.ts';
+import { isGiven, isMapValue, type Path, valueAt } from './source.ts';
 import {
   givenConductivity,
   solidConductivity,
@@ -90,8 +90,8 @@ function conductivityOf(
   wire: WireMetal,
 ): number | undefined {
   const key = (k: string): Path => [...path, k];
-  const stranded = 'stranded' in written;
-  const resistance = 'resistance' in written;
+  const stranded = isGiven(written, 'stranded');
+  const resistance = isGiven(written, 'resistance');
   if (stranded && resistance) {
     report(reading, 'WRONG_TYPE', 'stranded and resistance exclude each other; give one', key('resistance'));
     return undefined;
@@ -115,7 +115,7 @@ const SIZE_KEYS = ['diameter', 'radius', 'area', 'gauge'] as const;
 /** [m] */
 function readRadius(reading: Reading, path: Path, written: Record<string, unknown>): number | undefined {
   const key = (k: string): Path => [...path, k];
-  const given = SIZE_KEYS.filter((k) => k in written);
+  const given = SIZE_KEYS.filter((k) => isGiven(written, k));
   if (given.length > 1) {
     report(reading, 'WRONG_TYPE', `${given.join(' and ')} exclude each other; give one size`, key(given[1]!));
     return undefined;
@@ -125,7 +125,7 @@ function readRadius(reading: Reading, path: Path, written: Record<string, unknow
     reportNoSize(reading, path);
     return undefined;
   }
-  if ('stranded' in written && (size === 'area' || size === 'gauge')) {
+  if (isGiven(written, 'stranded') && (size === 'area' || size === 'gauge')) {
     const text = `stranded says the metal area; give the outer diameter beside it, not ${size}`;
     report(reading, 'WRONG_TYPE', text, key(size));
     return undefined;
@@ -164,15 +164,14 @@ function reportNoSize(reading: Reading, path: Path): void {
 
 /** [m] diameter */
 function readGauge(reading: Reading, path: Path): number | undefined {
-  const value = wordAt(reading, path);
-  if (typeof value !== 'string' && typeof value !== 'number') return undefined;
-  const size = parseWireSize(String(value));
+  const text = readText(reading, path);
+  if (text === undefined) return undefined;
+  const size = parseWireSize(text);
   if (size !== undefined) return size.diameter;
-  const hint =
-    typeof value === 'number' || /^[\d/]+$/.test(value.trim())
-      ? `; write AWG ${value} or SWG ${value}`
-      : '; gauges are AWG 4/0 to AWG 56 and SWG 7/0 to SWG 50, for other sizes give diameter or area';
-  report(reading, 'UNKNOWN_GAUGE', `no wire size ${quote(value)}${hint}`, path);
+  const hint = /^[\d/]+$/.test(text)
+    ? `; write AWG ${text} or SWG ${text}`
+    : '; gauges are AWG 4/0 to AWG 56 and SWG 7/0 to SWG 50, for other sizes give diameter or area';
+  report(reading, 'UNKNOWN_GAUGE', `no wire size ${quote(text)}${hint}`, path);
   return undefined;
 }
 

@@ -52,7 +52,7 @@ export function yamlValues(
       throw new TooMany();
     }
     let keys: readonly string[] = [];
-    let value: unknown;
+    let value: unknown = node === null ? null : undefined;
     if (isAlias(node)) {
       const target = anchors.get(node.source);
       if (target === undefined) report('SYNTAX', `no anchor ${quote(node.source)} before this alias`, start);

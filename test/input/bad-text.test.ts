@@ -127,6 +127,41 @@ describe('small slips', () => {
       ['7:14 MISSING a linear scale needs count'],
     ],
     [
+      'maps in place of words',
+      good
+        .replace('return: b', 'return: { b: c }')
+        .replace('[0 mm, 0 mm]', '{ from: { b: c }, distance: {} }')
+        .concat('title: {}'),
+      [
+        '3:36 WRONG_TYPE "from" is a map',
+        '3:56 WRONG_TYPE "distance" is a map',
+        '6:26 WRONG_TYPE "return" is a map',
+        '8:8 WRONG_TYPE "title" is a map',
+      ],
+    ],
+    [
+      'a key without a value',
+      good.replace('[50 Hz]', '{ from: 1 Hz, to: 1 Hz, count }'),
+      ['7:38 MISSING "count"'],
+    ],
+    [
+      'let names of the wrong kind',
+      good
+        .replace('diameter: 1 mm', 'gauge: yes, material: yes, insulation: yes')
+        .replace('[0 mm, 0 mm]', '{ from: yes, distance: yes, touching: three }')
+        .replace('return: b', 'return: yes, series: three')
+        .concat('let: { yes: true, three: 3 }'),
+      [
+        '3:15 UNKNOWN_GAUGE',
+        '3:30 UNKNOWN_MATERIAL',
+        '3:47 EXPRESSION insulation: let name "yes" is "true", which is no quantity',
+        '3:72 EXPRESSION distance: let name "yes" is "true"',
+        '3:87 WRONG_TYPE touching: "3" is neither true nor false',
+        '6:26 UNKNOWN_WIRE no wire "true"',
+        '6:39 WRONG_TYPE series: "3" is neither',
+      ],
+    ],
+    [
       'half a point',
       good.replace('[50 Hz]', '{ from: 1 Hz, to: 1 kHz, count: 2.5 }'),
       ['7:46 RANGE count: 2.5 is not a whole number'],
