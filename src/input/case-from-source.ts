@@ -86,7 +86,8 @@ function readAll(
     });
   }
   checkOverlaps(reading, wires);
-  const names = drafts.wires.map((draft) => draft.name);
+  // from the file, not the drafts: of too many wires none is read, yet all are known
+  const names = source.keys(['wires']);
   const { loops, bonded } = readLoops(reading, names);
   const frequencies = readFrequencies(reading);
   const title = readTitle(reading);

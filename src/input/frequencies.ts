@@ -1,5 +1,5 @@
 /** Frequencies of a file: a list, or a range on a log or linear scale with both ends kept. */
-import { MAX_FREQUENCIES } from './limits.ts';
+import { MAX_FREQUENCIES, MAX_PROBLEMS } from './limits.ts';
 import { type Range, type Reading, readCount, readQuantity, readText, report } from './reading.ts';
 import { isGiven, isMapValue, type Path, valueAt } from './source.ts';
 
@@ -38,10 +38,14 @@ function readList(reading: Reading, path: Path, written: readonly unknown[]): nu
     report(reading, 'TOO_LARGE', `${written.length} frequencies; the most is ${MAX_FREQUENCIES}`, path);
     return [];
   }
-  const values = written
-    .map((_, k) => readQuantity(reading, [...path, k], 'frequency', FREQUENCY))
-    .filter((value) => value !== undefined);
-  return Array.from(new Set(values)).sort((a, b) => a - b);
+  const values = new Set<number>();
+  for (let k = 0; k < written.length; k++) {
+    const value = readQuantity(reading, [...path, k], 'frequency', FREQUENCY);
+    if (value !== undefined) values.add(value);
+    // a list of one and the same mistake
+    else if (reading.problems.length > 2 * MAX_PROBLEMS) break;
+  }
+  return Array.from(values).sort((a, b) => a - b);
 }
 
 function readRange(reading: Reading, path: Path, written: Record<string, unknown>): number[] {

@@ -20,7 +20,8 @@ export interface ReadOptions {
 
 /**
  * Reads a cross-section file (YAML 1.2 or JSON).
- * @returns the case in SI units, or all problems in the order of the file; never throws a Problem
+ * @returns the case in SI units, or all problems in the order of the file
+ * @throws Problem INTERNAL, for a fault of the program only
  */
 export async function readCase(text: string, options: ReadOptions): Promise<ReadResult> {
   try {

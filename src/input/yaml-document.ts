@@ -43,9 +43,9 @@ export function readYaml(text: string, file: string): { source?: Source; problem
   const documents = Array.from(
     new Composer({ uniqueKeys: false, version: '1.2', strict: true }).compose(tokens, true, text.length),
   );
-  const document = documents[0] as Document.Parsed | undefined;
+  const tree = documents[0] as Document.Parsed | undefined;
   const errors = documents.flatMap((d) => d.errors);
-  if (errors.length > 0 || document === undefined) {
+  if (errors.length > 0 || tree === undefined) {
     const problems = errors
       .slice(0, MOST_SYNTAX_ERRORS)
       .map(
@@ -58,8 +58,8 @@ export function readYaml(text: string, file: string): { source?: Source; problem
     const at = second.contents?.range?.[0] ?? second.range[0];
     return fail('SYNTAX', 'a second document in one file; give one case a file', at);
   }
-  if (document.directives?.yaml.explicit === true && document.directives.yaml.version !== '1.2') {
-    return fail('SYNTAX', `YAML ${document.directives.yaml.version}; the format is YAML 1.2`, 0);
+  if (tree.directives?.yaml.explicit === true && tree.directives.yaml.version !== '1.2') {
+    return fail('SYNTAX', `YAML ${tree.directives.yaml.version}; the format is YAML 1.2`, 0);
   }
-  return yamlValues(document, placeAt);
+  return yamlValues(tree, placeAt);
 }

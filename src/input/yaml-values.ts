@@ -33,7 +33,7 @@ const join = (path: Path): string => path.join('\u0001');
 
 /** @returns the data with places; `source` is absent where aliases explode */
 export function yamlValues(
-  document: Document.Parsed,
+  tree: Document.Parsed,
   placeAt: (offset: number) => Place,
 ): { source?: Source; problems: Problem[] } {
   const problems: Problem[] = [];
@@ -112,7 +112,7 @@ export function yamlValues(
 
   let data: unknown;
   try {
-    data = convert(document.contents, [], 0, 0);
+    data = convert(tree.contents, [], 0, 0);
   } catch (error) {
     if (!(error instanceof TooMany)) throw error;
     return { problems };

@@ -49,6 +49,11 @@ describe('contract.yaml', async () => {
     expect(c.cautions.find((k) => k.code === 'SMALLEST_GAP')?.text).toContain('"bare"');
   });
 
+  it('steps through a decade by equal ratios, to the last digit but one', () => {
+    for (const [k, f] of c.frequencies.entries())
+      expect(Math.abs(f / 10 ** (1 + k / 10) - 1)).toBeLessThan(1e-15);
+  });
+
   it('reads loops and frequencies', () => {
     expect(c.loops.map((l) => [l.name, l.go, l.return, l.series])).toEqual([
       ['supply', [0], [1, 3], false],
@@ -159,6 +164,37 @@ describe('one meaning, several spellings', () => {
   it('puts a title on one line', async () => {
     expect((await caseOf(`${pair('diameter: 1 mm')}title: "a\\n.end\\n  b"`)).title).toBe('a .end b');
   });
+});
+
+it('carries the permeability of a metal and of a material', async () => {
+  const own = 'materials: { core: { resistivity: 100 nohm m, relative_permeability: 250 } }';
+  expect((await caseOf(pair('diameter: 1 mm, material: nickel'))).wires[0]!.relativePermeability).toBe(100);
+  expect((await caseOf(pair('diameter: 1 mm, material: core', own))).wires[0]!.relativePermeability).toBe(
+    250,
+  );
+});
+
+it('takes a reference temperature of a material', async () => {
+  const own =
+    'materials: { alloy: { resistivity: 20 nohm m, temperature_coefficient: 0.004 1/K, reference_temperature: 0 °C } }';
+  const [wire] = (await caseOf(pair('diameter: 1 mm, material: alloy, temperature: 50 °C', own))).wires;
+  expect(1 / wire!.conductivity).toBeCloseTo(20e-9 * 1.2, 22);
+});
+
+it('drops a bonded group that is a side of a loop: it is bonded there', async () => {
+  const c = await caseOf(`rimflow: 1
+wires:
+  a: { diameter: 1 mm, at: [0 mm, 0 mm] }
+  b: { diameter: 1 mm, at: [2 mm, 0 mm] }
+  c: { diameter: 1 mm, at: [4 mm, 0 mm] }
+  d: { diameter: 1 mm, at: [6 mm, 0 mm] }
+  e: { diameter: 1 mm, at: [8 mm, 0 mm] }
+loops: { pair: { go: a, return: [b, c] } }
+bonded: [[c, b], [d, e]]
+frequencies: { from: 20 Hz, to: 1 kHz, per_decade: 3 }`);
+  expect(c.bonded).toEqual([[3, 4]]);
+  // both ends kept, the last step short
+  expect(c.frequencies.map((f) => Math.round(f))).toEqual([20, 43, 93, 200, 431, 928, 1000]);
 });
 
 describe('touching', () => {

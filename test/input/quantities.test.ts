@@ -63,6 +63,7 @@ const VALUES: [Family, string, number][] = [
   ['temperature', '20 °C + 40 K', 60],
   ['temperature', '20 °C + (60 °C - 20 °C)', 60],
   ['temperature', 'max(20 °C, 60 °C)', 60],
+  ['temperature', '-40 °C + 10 K', -30],
   ['frequency', '50 Hz', 50],
   ['frequency', '1 kHz', 1e3],
   ['frequency', '100 MHz', 1e8],
