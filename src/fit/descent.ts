@@ -14,7 +14,7 @@ export interface DescentResult {
   readonly parameters: Parameters;
   /** [1] worst relative error over the target */
   readonly worst: number;
-  /** linearisations made */
+  /** [1] linearisations made */
   readonly steps: number;
 }
 
@@ -56,9 +56,14 @@ export function minimaxDescent(target: Target, start: Parameters): DescentResult
   for (; steps < MOST_STEPS && size > NARROWEST_BOX && here.worst > ROUNDING; steps++) {
     const box = trustBox(target, here.parameters, unit, size);
     const linear = minimaxStep({ errors: here.errors, slopes, ...box }, held);
-    held = linear.held;
+    held = linear.settled ? linear.held : undefined;
     const hoped = here.worst - linear.worst;
-    if (!(hoped > LEAST_GAIN * here.worst)) break;
+    if (!(hoped > LEAST_GAIN * here.worst)) {
+      if (linear.settled) break;
+      // ties that the exchanges could not leave; a smaller box has others
+      size /= 4;
+      continue;
+    }
     const next = correctedTrial(target, here, slopes, box, linear, unit);
     const gain = (here.worst - next.worst) / hoped;
     // usual trust-region bounds (common practice): shrink below a quarter of the hoped gain, grow above

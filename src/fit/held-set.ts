@@ -20,11 +20,14 @@ export interface MinimaxProblem {
  * for the box.
  */
 export interface Workspace {
+  /** [1] variables */
   readonly n: number;
+  /** [1] errors */
   readonly rows: number;
   readonly problem: MinimaxProblem;
   /** [1] ends of the box as far as it is open by now */
   readonly low: Float64Array;
+  /** [1] */
   readonly high: Float64Array;
   /** [1] inverse of the matrix whose rows are the g of the held constraints; row-major, n + 1 by n + 1 */
   readonly inverse: Float64Array;

@@ -1,3 +1,4 @@
+export { loneWireCircuit } from './lone-wire.ts';
 export type { WorstErrors } from './measure.ts';
 export {
   type Section,

@@ -12,9 +12,14 @@ import { type MinimaxProblem, refreshInverse, timesInverse, type Workspace } fro
 export interface MinimaxStep {
   /** [1] d, within the box */
   readonly step: Float64Array;
-  /** [1] the value of the linear program: the least possible worst error */
+  /**
+   * [1] the worst error after the step, as the linear program has it: the least possible one where settled
+   */
   readonly worst: number;
+  /** [1] how many it took */
   readonly exchanges: number;
+  /** false when the exchanges ran out: the step is within the box, but not the best one */
+  readonly settled: boolean;
   /** the constraints that hold with equality at the optimum, for a warm start */
   readonly held: Int32Array;
 }
@@ -26,8 +31,8 @@ export interface MinimaxStep {
 const TIE_BREAK = 1e-6;
 
 /**
- * @param warm held constraints of a like problem solved before: used when they still are a dual-feasible set
- * @throws Problem NO_CONVERGENCE after `MOST_EXCHANGES` exchanges a held constraint
+ * @param warm held constraints of a like problem solved before: used when they still are a dual-feasible
+ * set
  */
 export function minimaxStep(problem: MinimaxProblem, warm?: Int32Array): MinimaxStep {
   const n = problem.low.length;
@@ -53,21 +58,20 @@ export function minimaxStep(problem: MinimaxProblem, warm?: Int32Array): Minimax
   for (const index of work.held) work.isHeld[index] = 1;
   const point = new Float64Array(size);
   let exchanges = 0;
+  let settled = true;
   for (const share of part < 1 ? [part, 1] : [1]) {
     for (let j = 0; j < n; j++) {
       work.low[j] = share * problem.low[j];
       work.high[j] = share * problem.high[j];
     }
-    exchanges = exchangeToOptimum(work, point, exchanges);
+    const done = exchangeToOptimum(work, point);
+    exchanges += done.exchanges;
+    settled = done.settled;
     // a box that holds nothing back at its inner size changes nothing by growing
-    if (work.held.every((index) => index < 2 * work.rows)) break;
+    if (!settled || work.held.every((index) => index < 2 * work.rows)) break;
   }
-  return {
-    step: intoBox(point, problem),
-    worst: worstAt(problem, point),
-    exchanges,
-    held: work.held,
-  };
+  const step = intoBox(point, problem);
+  return { step, worst: worstAt(problem, step), exchanges, settled, held: work.held };
 }
 
 /** Takes over a held set; false, and the set of `holdBox` stays, when it is not dual feasible here. */

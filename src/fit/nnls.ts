@@ -8,7 +8,9 @@ import { Problem } from '../problem.ts';
 
 /** Columns are stored one after the other: entry (i, j) at `values[j * rows + i]`. */
 export interface ColumnMatrix {
+  /** [1] */
   readonly rows: number;
+  /** [1] */
   readonly columns: number;
   /** [1] */
   readonly values: Float64Array;

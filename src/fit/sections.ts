@@ -1,7 +1,8 @@
 /**
- * From samples to a circuit: for each number of sections a descent from the merged convex start and one
- * from the circuit with one section fewer plus a section where its error is largest; the better one stays.
- * Over random starts this finds the best known optimum (test/fit).
+ * From samples to a circuit. For each number of sections three starts descend, and the best result stays:
+ * the merged convex start, the circuit with one section fewer plus one where its error is largest, and
+ * (where that size is to be returned) the circuit with one section more, its two likest merged. Random
+ * starts found nothing better (test/fit/optimum.test.ts).
  */
 import { Problem } from '../problem.ts';
 import { type DescentResult, minimaxDescent } from './descent.ts';
@@ -69,15 +70,19 @@ export function fitSections(samples: LoopSamples, size: FitSize): SectionModel {
   checkSize(size);
   const target = targetOf(samples, 0, 2);
   const grid = gridStart(target);
-  if ('sections' in size) {
-    // two sizes below give the added-section start something to grow from
-    let best: DescentResult | undefined;
-    for (let n = Math.max(0, size.sections - 2); n <= size.sections; n++) {
-      best = bestOf(target, grid, samples.resistanceDc, n, best);
-    }
-    return modelOf(samples, best!.parameters);
-  }
+  if ('sections' in size) return bestOfSize(samples, target, grid, size.sections);
   return fewestSections(samples, target, grid, size.within);
+}
+
+function bestOfSize(samples: LoopSamples, target: Target, grid: Parameters, sections: number): SectionModel {
+  // two sizes below give the added-section start something to grow from
+  let best: DescentResult | undefined;
+  for (let n = Math.max(0, sections - 2); n <= sections; n++) {
+    best = bestOf(target, grid, samples.resistanceDc, n, best);
+  }
+  const above = bestOf(target, grid, samples.resistanceDc, sections + 1, best);
+  const shrunk = shrink(target, above, samples.resistanceDc, sections);
+  return modelOf(samples, (shrunk.worst < best!.worst ? shrunk : best!).parameters);
 }
 
 function fewestSections(
@@ -94,9 +99,7 @@ function fewestSections(
     reached.push(worst(model));
     if (reached[n] > within) continue;
     if (n === 0) return model;
-    // the good circuit with two sections merged is a third start for the size below
-    const merged = mergeSections(best.parameters, samples.resistanceDc, n - 1);
-    const smaller = modelOf(samples, minimaxDescent(target, merged).parameters);
+    const smaller = modelOf(samples, shrink(target, best, samples.resistanceDc, n - 1).parameters);
     return worst(smaller) <= within ? smaller : model;
   }
   const { band, errors } = modelOf(samples, best!.parameters);
@@ -131,6 +134,11 @@ function bestOf(
   const grown = minimaxDescent(target, addSection(target, before.parameters));
   const better = grown.worst < merged.worst ? grown : merged;
   return better.worst < before.worst ? better : before;
+}
+
+/** Descent from the circuit of one section more with its two likest merged. */
+function shrink(target: Target, above: DescentResult, resistanceDc: number, sections: number): DescentResult {
+  return minimaxDescent(target, mergeSections(above.parameters, resistanceDc, sections));
 }
 
 /** A small section at the frequency where R or L is worst. */

@@ -67,6 +67,7 @@ export function mergeSections(parameters: Parameters, resistanceDc: number, sect
     r: parameters[k],
     p: parameters[held + k],
   }));
+  list.sort((a, b) => a.p - b.p);
   const weight = list.map(({ r, p }) => {
     const whole = impedanceAt(list, resistanceDc, last, p);
     return 0.5 * (r / whole.r + r / p / whole.l);

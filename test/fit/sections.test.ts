@@ -79,6 +79,15 @@ describe('fewest sections for a wanted error', () => {
     }
   });
 
+  test('a circuit far larger than a narrow band needs is found without a stop, and more exact still', () => {
+    const samples = pairSamples([THIN_COPPER], 1e6, 1e7);
+    for (const sections of [8, 10, 12]) {
+      const model = fitSections(samples, { sections });
+      expect(model.sections.length).toBeGreaterThanOrEqual(8);
+      expect(Math.max(model.fittedErrors.resistance, model.fittedErrors.inductance)).toBeLessThan(1e-6);
+    }
+  });
+
   test('more sections never fit worse, and each brings the error of a pair down threefold', () => {
     const samples = pairSamples([THIN_COPPER], 10, 1e7);
     let before = Infinity;
