@@ -1,10 +1,88 @@
-// Compiles src/ to dist/ (ES modules and declarations, the tree mirrors the source).
+// Builds dist/: the library by tsc (ES modules and declarations, the tree mirrors the source), and the command as one
+// bundle with lazy chunks, because finding and reading hundreds of small modules would take longer than the job.
+// Builds beside and swaps the folders at the end, so that nobody meets half a build. `--if-stale` leaves a build alone
+// that was made of the same files.
 import { execFileSync } from 'node:child_process';
-import { rmSync } from 'node:fs';
+import { createHash } from 'node:crypto';
+import {
+  chmodSync,
+  copyFileSync,
+  existsSync,
+  mkdirSync,
+  readdirSync,
+  readFileSync,
+  renameSync,
+  rmSync,
+  writeFileSync,
+} from 'node:fs';
 import { createRequire } from 'node:module';
+import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
+import { rolldown } from 'rolldown';
 
 const root = fileURLToPath(new URL('..', import.meta.url));
-const require = createRequire(import.meta.url);
-rmSync(`${root}/dist`, { recursive: true, force: true });
-execFileSync(process.execPath, [require.resolve('typescript/bin/tsc'), '-p', root], { stdio: 'inherit' });
+const dist = join(root, 'dist');
+const stamp = join(dist, '.made-of');
+
+/** Hash of all that a build depends on. */
+function origin() {
+  const hash = createHash('sha256');
+  const sources = readdirSync(join(root, 'src'), { recursive: true, withFileTypes: true })
+    .filter((entry) => entry.isFile())
+    .map((entry) => join(entry.parentPath, entry.name));
+  const others = [
+    'package.json',
+    'package-lock.json',
+    'tsconfig.json',
+    'tsconfig.build.json',
+    'scripts/build.mjs',
+  ];
+  for (const file of [...sources.sort(), ...others.map((name) => join(root, name))]) {
+    hash.update(file).update('\0').update(readFileSync(file)).update('\0');
+  }
+  return hash.digest('hex');
+}
+
+async function bundleCommand(folder) {
+  const bundle = await rolldown({
+    input: { bin: join(root, 'src/cli/bin.ts') },
+    platform: 'node',
+    logLevel: 'warn',
+  });
+  await bundle.write({
+    dir: join(folder, 'cli'),
+    format: 'esm',
+    minify: true,
+    entryFileNames: '[name].js',
+    chunkFileNames: '[name]-[hash].js',
+  });
+  await bundle.close();
+  chmodSync(join(folder, 'cli/bin.js'), 0o755);
+}
+
+const madeOf = origin();
+const fresh =
+  process.argv.includes('--if-stale') && existsSync(stamp) && readFileSync(stamp, 'utf8') === madeOf;
+if (!fresh) {
+  const beside = join(root, 'node_modules', `.build-${process.pid}`);
+  const old = `${beside}-old`;
+  try {
+    mkdirSync(beside, { recursive: true });
+    const tsc = createRequire(import.meta.url).resolve('typescript/bin/tsc');
+    execFileSync(process.execPath, [tsc, '-p', join(root, 'tsconfig.build.json'), '--outDir', beside], {
+      stdio: 'inherit',
+    });
+    copyFileSync(join(root, 'src/input/case.schema.json'), join(beside, 'input/case.schema.json'));
+    await bundleCommand(beside);
+    writeFileSync(join(beside, '.made-of'), madeOf);
+    if (existsSync(dist)) renameSync(dist, old);
+    renameSync(beside, dist);
+  } catch (error) {
+    // tsc has said what is wrong; anything else has not
+    if (error.status === undefined) process.stderr.write(`${error.stack}\n`);
+    process.stderr.write('the build failed; dist/ is as it was\n');
+    process.exitCode = 1;
+  } finally {
+    for (const folder of [beside, old]) rmSync(folder, { recursive: true, force: true });
+  }
+}
