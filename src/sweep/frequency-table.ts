@@ -3,6 +3,7 @@ import { impedanceAt, type LoopImpedance, prepareCase } from '../loops/index.ts'
 import type { Case } from '../model/index.ts';
 import type { Caution } from '../problem.ts';
 import { Problem } from '../problem.ts';
+import { caseCautions } from './cautions.ts';
 import type { CurrentSeries, FrequencyTable, LoopSeries, MutualSeries } from './table.ts';
 
 export interface SweepOptions {
@@ -57,7 +58,7 @@ export async function frequencyTable(c: Case, options: SweepOptions = {}): Promi
     loops,
     mutual,
     currents: currentSeries(c, points),
-    cautions: [...c.cautions, ...toleranceCaution(c, points)],
+    cautions: [...caseCautions(c), ...toleranceCaution(c, points)],
   };
 }
 

@@ -1,2 +1,12 @@
+export { caseJson, caseText } from './case.ts';
+export type { Column, ColumnKind, TableChoices } from './columns.ts';
+export { columnsToCsv, csvField } from './csv.ts';
+export { plainLine } from './display.ts';
+export { engineering } from './engineering.ts';
+export { jsonText } from './json.ts';
+export { type ListColumn, listText } from './listing.ts';
 export { type NetlistInput, netlistText } from './netlist.ts';
 export { safeSubcircuitName } from './netlist-text.ts';
+export { type Run, runOf } from './run.ts';
+export { TABLE_FORMATS, type TableFormat, tableText } from './table.ts';
+export { alignColumns, cautionLine } from './text.ts';
