@@ -1,0 +1,3 @@
+export { solidReflections } from './reflections.ts';
+export type { RoundWire } from './round-wire.ts';
+export { solidInternalInductance, solidResistanceDc } from './solid.ts';
