@@ -132,8 +132,7 @@ function withCommonOptions(command: Command, formats: readonly string[]): Comman
     .option(
       '--set <NAME=VALUE>',
       'another value for a let name; may stand several times',
-      (value: string, before: string[]) => [...before, value],
-      [],
+      (value: string, before: string[] | undefined) => [...(before ?? []), value],
     )
     .option('--fail-on-caution', 'exit status 1 when there is a caution');
 }

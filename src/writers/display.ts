@@ -53,10 +53,13 @@ export function displayTable(table: FrequencyTable, choices: TableChoices): Disp
   return { columns, missed, errors: errorLine(table) };
 }
 
-/** Of the smallest value, so that no digit hides behind zeros. */
+/** Of the middle between the smallest and the largest value on the log scale. */
 function columnScale({ values }: Column): Scale {
   const sizes = values.filter((value) => value !== undefined && value !== 0).map((value) => Math.abs(value!));
-  return scaleOf(sizes.length === 0 ? 0 : sizes.reduce((a, b) => Math.min(a, b)));
+  if (sizes.length === 0) return scaleOf(0);
+  const least = sizes.reduce((a, b) => Math.min(a, b));
+  const most = sizes.reduce((a, b) => Math.max(a, b));
+  return scaleOf(Math.sqrt(least) * Math.sqrt(most));
 }
 
 function unitOfKind(kind: ColumnKind): string {
