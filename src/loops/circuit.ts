@@ -10,6 +10,7 @@ import { Problem } from '../problem.ts';
 import { solidResistanceDc } from '../skin/index.ts';
 
 export interface Circuit {
+  /** [1] */
   readonly loops: number;
   /** members of each group, wire indices */
   readonly groups: readonly Int32Array[];

@@ -37,7 +37,7 @@ export interface LoopImpedance {
   readonly currents: ComplexVector;
   /** [1] orders used, of each wire */
   readonly orders: Int32Array;
-  /** operator products of all loops, at the final orders */
+  /** [1] operator products of all loops, at the final orders */
   readonly iterations: number;
   /** true when every stated error is within the tolerance */
   readonly reached: boolean;

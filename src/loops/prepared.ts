@@ -8,6 +8,7 @@ import { type Circuit, circuitOf } from './circuit.ts';
 export interface PreparedCase {
   readonly case: Case;
   readonly circuit: Circuit;
+  /** [1] slowest decay of the coefficients of each wire, over its neighbours */
   readonly alpha: Float64Array;
   readonly space: KrylovSpace;
   /** tables up to the highest orders asked for so far; replaced when more are needed */

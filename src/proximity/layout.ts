@@ -45,6 +45,7 @@ export interface Layout {
    * Mode -n is its conjugate.
    */
   readonly monopoleRe: Float64Array;
+  /** [1] imaginary parts of the same */
   readonly monopoleIm: Float64Array;
   /** [1] -2 ln(distance/reference), on the diagonal -2 ln(radius/reference); N x N */
   readonly logarithms: Float64Array;

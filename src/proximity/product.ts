@@ -11,9 +11,11 @@ import type { TranslationTable } from './translation.ts';
 
 /** Scratch of one product, reused. */
 export interface ProductScratch {
-  /** four numbers a mode: (+re, +im, -re, -im), rotated into the frame of the pair */
+  /** [1] four numbers a mode: (+re, +im, -re, -im), rotated into the frame of the pair */
   readonly inI: Float64Array;
+  /** [1] likewise */
   readonly inJ: Float64Array;
+  /** [1] likewise */
   readonly outJ: Float64Array;
 }
 

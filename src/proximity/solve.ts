@@ -72,7 +72,7 @@ export interface MultipoleSolution {
   readonly orderZero: ComplexVector;
   /** A y - b, measured: what the quadratic estimate needs */
   readonly residual: ComplexVector;
-  /** operator products; 0 for a factorisation */
+  /** [1] operator products; 0 for a factorisation */
   readonly iterations: number;
   /** [1] estimate of the norm of the inverse of the system */
   readonly inverseNorm: number;
