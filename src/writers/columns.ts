@@ -145,7 +145,10 @@ function detailColumns(detail: TableDetail, rows: number, ohm: string, henry: st
         name: `${name}_R_ratio`,
         label: `${name} R/R dc`,
         kind: 'ratio',
-        values: loop.resistanceRatio === undefined ? new Array<undefined>(rows) : list(loop.resistanceRatio),
+        values:
+          loop.resistanceRatio === undefined
+            ? new Array<undefined>(rows).fill(undefined)
+            : list(loop.resistanceRatio),
       },
       {
         name: `${name}_L_internal_${henry}`,
