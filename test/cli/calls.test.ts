@@ -1,4 +1,5 @@
 /** The command line on a machine in memory: what is written where, and the code and exit status of every wrong call. */
+import { readdirSync, readFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import { PAIR, run, tableOf } from './fake-io.ts';
 
@@ -241,6 +242,21 @@ describe('wrong calls', () => {
     expect(err).toMatch(/<stdin>:3:\d+ UNIT /);
     expect(err).toMatch(/<stdin>:4:1 UNKNOWN_KEY .*did you mean "loops"/);
   });
+  const bad = readdirSync(new URL('../../fixtures/input/bad', import.meta.url));
+  it.each(bad)(
+    'fixtures/input/bad/%s: status 2, nothing written, one line for each problem',
+    async (name) => {
+      const stdin = readFileSync(new URL(`../../fixtures/input/bad/${name}`, import.meta.url), 'utf8');
+      const expected = [...stdin.matchAll(/^# expect (\d+:\d+ [A-Z_]+) /gm)].map(([, head]) => head);
+      const { status, out, err } = await run(['table', '-'], { stdin });
+      expect([status, out]).toEqual([2, '']);
+      const heads = err
+        .trimEnd()
+        .split('\n')
+        .map((line) => /^<stdin>:(\d+:\d+ [A-Z_]+) /.exec(line)?.[1]);
+      expect(heads).toEqual(expected);
+    },
+  );
   it('lets no text of a file move the cursor', async () => {
     const stdin = PAIR.replace('title: a pair', 'title: "a\\e[2Jb"');
     for (const format of ['text', 'markdown', 'json', 'csv']) {
