@@ -16,8 +16,7 @@ export interface Scale {
 /** The prefix under which a value stands between 1 and 1000, as far as there are prefixes. */
 export function scaleOf(value: number): Scale {
   if (value === 0) return { prefix: '', factor: 1 };
-  // a value that rounds up to 1000 belongs to the next prefix
-  const power = Math.floor(Math.log10(Math.abs(value) * (1 + 1e-9)) / 3);
+  const power = Math.floor(decimalExponent(value) / 3);
   const group = Math.max(-PLAIN, Math.min(PREFIXES.length - 1 - PLAIN, power));
   return { prefix: PREFIXES[group + PLAIN], factor: 10 ** (3 * group) };
 }
@@ -39,6 +38,12 @@ export function digitsWithin(error: number): number {
 export function fixed(value: number, scale: Scale, digits: number): string {
   const scaled = Number((value / scale.factor).toPrecision(digits));
   if (scaled === 0) return '0';
-  const decimals = digits - 1 - Math.floor(Math.log10(Math.abs(scaled)) + 1e-12);
+  const decimals = digits - 1 - decimalExponent(scaled);
   return scaled.toFixed(Math.max(0, Math.min(20, decimals)));
+}
+
+/** Exact at powers of ten, where a rounded logarithm may fall below. */
+function decimalExponent(value: number): number {
+  const text = value.toExponential();
+  return Number(text.slice(text.indexOf('e') + 1));
 }

@@ -140,6 +140,8 @@ describe('total', () => {
     json.loops.one.resistance_error.forEach((error: number, i: number) => {
       const absolute = error * json.loops.one.resistance[i];
       expect(absolute / (t.loops[0].resistanceError[i] * t.loops[0].resistance[i] * 3)).toBeCloseTo(1, 12);
+      const ofL = json.loops.one.inductance_error[i] * json.loops.one.inductance[i];
+      expect(ofL / (t.loops[0].inductanceError[i] * t.loops[0].inductance[i] * 3)).toBeCloseTo(1, 12);
     });
   });
   it('makes the absolute error of a zero R relative to the lumped part, and leaves it absolute without one', () => {
@@ -164,6 +166,16 @@ describe('detail', () => {
     // D/a = 500: the metal of the neighbour changes it by about (a/D)^2
     const expected = 2e-7 * Math.log(500 ** 2 / (1 * 0.5));
     for (const external of detail.loops[0].externalInductance) expect(external / expected).toBeCloseTo(1, 5);
+  });
+  it('weighs each wire by the square of its current, out of phase too', () => {
+    // 0.6 - 0.8j and 1: each of magnitude 1; 50 nH/m a wire at 0 Hz
+    const currents = [
+      { loop: 'one', wire: 'a', re: new Float64Array(3).fill(0.6), im: new Float64Array(3).fill(-0.8) },
+      { loop: 'one', wire: 'b', re: new Float64Array(3).fill(-2), im: new Float64Array(3) },
+    ];
+    const { loops } = tableDetail(c, tableOf(c, { currents }));
+    expect(loops[0].internalInductance[0] / 50e-9).toBeCloseTo(1 + 4, 12);
+    expect(loops[1].internalInductance[0]).toBe(0);
   });
   it('adds up to L', () => {
     detail.loops.forEach((loop, k) => {
@@ -227,6 +239,9 @@ describe('text and markdown', () => {
     [0.123456789, 1e-3, '123'],
     [999.9996, 1e-4, '1000'],
     [0, 1e-9, '0'],
+    [1000, 1e-4, '1.000'],
+    [0.001, 1e-4, '1.000'],
+    [1e-15, 1e-4, '1.000'],
   ])('shows %d with a relative error of %d as %s', (value, error, expected) => {
     expect(shown(value, error)).toBe(expected);
   });
@@ -245,6 +260,26 @@ describe('text and markdown', () => {
       }),
       { seed: 20_260_102 },
     );
+  });
+  it('shows mutual terms with the digits that an error relative to the loops leaves', () => {
+    const t = tableOf(
+      { ...c, frequencies: [0] },
+      {
+        mutual: [
+          {
+            between: ['one', 'two'],
+            resistance: Float64Array.of(0.0123456),
+            inductance: Float64Array.of(1.23456e-9),
+            error: Float64Array.of(1e-6),
+          },
+        ],
+      },
+    );
+    t.loops[0].inductance[0] = 4e-6;
+    t.loops[1].inductance[0] = 1e-8;
+    t.loops[0].resistance[0] = 4;
+    // 1e-6 sqrt(4 ohm 1 ohm) = 2 uohm of 12.3 mohm; 1e-6 sqrt(4 uH 10 nH) = 0.2 pH of 1.2 nH: three digits each
+    expect(tableText(t, 'text').split('\n')[4]).toMatch(/ 12\.3 +1\.23$/);
   });
   it('marks the rows that miss the tolerance', () => {
     const t = tableOf(c, { reached: false });
