@@ -59,7 +59,8 @@ function columnScale({ values }: Column): Scale {
   if (sizes.length === 0) return scaleOf(0);
   const least = sizes.reduce((a, b) => Math.min(a, b));
   const most = sizes.reduce((a, b) => Math.max(a, b));
-  return scaleOf(Math.sqrt(least) * Math.sqrt(most));
+  // rounded, so that a power of thousand stays one
+  return scaleOf(Number((Math.sqrt(least) * Math.sqrt(most)).toPrecision(12)));
 }
 
 function unitOfKind(kind: ColumnKind): string {
