@@ -1,10 +1,8 @@
 export {
-  type ComplexVector,
   type GmresOptions,
   type GmresResult,
   gmres,
   KrylovSpace,
-  norm2,
 } from './gmres.ts';
 export {
   type ComplexLu,
@@ -13,3 +11,4 @@ export {
   solveLu,
   solveLuAdjoint,
 } from './lu.ts';
+export { type ComplexVector, norm2 } from './vector.ts';
