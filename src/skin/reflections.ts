@@ -36,8 +36,19 @@ export function solidReflections(
     im.fill(0, 0, orders);
     return;
   }
+  rayReflections(t, wire.relativePermeability, orders, re, im);
+}
+
+/** As `solidReflections`, of T = |q|^2 [1] and mu_r [1] alone. */
+export function rayReflections(
+  t: number,
+  relativePermeability: number,
+  orders: number,
+  re: Float64Array,
+  im: Float64Array,
+): void {
   if (orders < 1) return;
-  const mu = wire.relativePermeability;
+  const mu = relativePermeability;
   const start = uniformRatioStart(orders, t);
   rayRatio_uniform(start, t, ratio);
   rayRatio_backward(start, orders, t, ratio);
