@@ -57,8 +57,37 @@ export {
   type Place,
   Problem,
 } from './problem.ts';
-// one wire alone
-export { type RoundWire, solidInternalInductance, solidResistanceDc } from './skin/index.ts';
+// one wire alone, and the functions behind it
+export {
+  type BinaryComplex,
+  besselI,
+  besselIBinary,
+  besselIRatio,
+  besselIScaled,
+  besselJ,
+  besselJ1Zeros,
+  besselK,
+  besselKBinary,
+  besselKRatio,
+  besselKScaled,
+  type ComplexPoint,
+  type KelvinFirst,
+  type KelvinSecond,
+  kelvinFirst,
+  kelvinSecond,
+  type RoundWire,
+  type SkinMetal,
+  skinDepth,
+  solidCurrentDensity,
+  solidInteriorRatio,
+  solidInternalImpedance,
+  solidInternalImpedances,
+  solidInternalInductance,
+  solidReflection,
+  solidReflections,
+  solidResistanceDc,
+  solidSurfaceImpedance,
+} from './skin/index.ts';
 
 // all frequencies of a case
 export {

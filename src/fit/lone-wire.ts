@@ -10,22 +10,22 @@
  * fits.
  */
 import { Problem } from '../problem.ts';
-import { type RoundWire, solidInternalInductance, solidResistanceDc } from '../skin/index.ts';
+import { besselJ1Zeros, type RoundWire, solidInternalInductance, solidResistanceDc } from '../skin/index.ts';
 import type { Section, SectionCircuit } from './model.ts';
 
 /**
  * @param wire solid and not perfect
- * @param zeros [1] the first zeros of J_1, rising, at least one; each gives a section, and the rest one more
+ * @param count [1] zeros of J_1 taken, whole, at least one; each gives a section, and the rest one more
  * @returns the inside of the wire alone, per metre, with L_inf = 0: add the external inductance of its loop
- * @throws Problem DOMAIN for a perfect wire, no zeros, or zeros that do not rise from above 0
+ * @throws Problem DOMAIN for a perfect wire, or a wrong number of zeros
  */
-export function loneWireCircuit(wire: RoundWire, zeros: ArrayLike<number>): SectionCircuit {
+export function loneWireCircuit(wire: RoundWire, count: number): SectionCircuit {
   const resistance = solidResistanceDc(wire);
-  if (!(resistance > 0 && zeros.length > 0)) {
+  if (!(resistance > 0 && count >= 1)) {
     throw new Problem(
       'DOMAIN',
-      `the exact circuit of a wire with R_dc = ${resistance} ohm/m from ${zeros.length} zeros of J_1; it needs ` +
-        'a wire that is not perfect and at least one zero',
+      `the exact circuit of a wire with R_dc = ${resistance} ohm/m from ${count} zeros of J_1; it needs a wire that ` +
+        'is not perfect and at least one zero',
     );
   }
   // L_dc = mu / 8 pi = R_dc T / 8
@@ -36,11 +36,8 @@ export function loneWireCircuit(wire: RoundWire, zeros: ArrayLike<number>): Sect
   // what is left of the two sums, in units of p: sum 1/j^2 and sum 1/j^4
   let first = 1 / 8;
   let second = 1 / 192;
-  for (let k = 0; k < zeros.length; k++) {
-    const square = zeros[k] * zeros[k];
-    if (!(zeros[k] > (k === 0 ? 0 : zeros[k - 1]))) {
-      throw new Problem('DOMAIN', `zero ${k + 1} of J_1 is ${zeros[k]}; zeros must rise from above 0`);
-    }
+  for (const zero of besselJ1Zeros(count)) {
+    const square = zero * zero;
     sections.push({ resistance, inductance: scale / square });
     first -= 1 / square;
     second -= 1 / (square * square);
