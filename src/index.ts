@@ -79,6 +79,7 @@ export {
   type SkinMetal,
   skinDepth,
   solidCurrentDensity,
+  solidDecayRates,
   solidInteriorRatio,
   solidInternalImpedance,
   solidInternalImpedances,

@@ -12,6 +12,7 @@ export {
 } from './bessel/functions.ts';
 export { besselJ, besselJ1Zeros } from './bessel/j.ts';
 export { type KelvinFirst, type KelvinSecond, kelvinFirst, kelvinSecond } from './bessel/kelvin.ts';
+export { solidDecayRates } from './decay-rates.ts';
 export { solidReflections } from './reflections.ts';
 export type { RoundWire } from './round-wire.ts';
 export { type SkinMetal, skinDepth } from './skin-depth.ts';

@@ -28,12 +28,12 @@ function tree(files: Record<string, string>): Record<string, string> {
     'problem.ts': 'export class Problem extends Error {}\n',
     'model/index.ts': "export { MU0 } from './constants.ts';\n",
     'model/constants.ts': '/** [H/m] */\nexport const MU0 = 4e-7 * Math.PI;\n',
-    'skin/index.ts': "export { solid } from './solid.ts';\n",
+    'skin/index.ts': "export { besselRatio, solid } from './solid.ts';\n",
     'skin/solid.ts':
       "import { MU0 } from '../model/index.ts';\nimport { Problem } from '../problem.ts';\nexport const besselRatio = MU0;\nexport const solid = () => new Problem();\n",
     'cli/bin.ts':
       "import { solid } from '../skin/index.ts';\nimport { argv } from 'node:process';\nsolid();\nprocess.exit(argv.length);\n",
-    'index.ts': "export { solid } from './skin/index.ts';\n",
+    'index.ts': "export { besselRatio, solid } from './skin/index.ts';\n",
     ...files,
   };
 }
@@ -129,6 +129,11 @@ describe('scripts/layers', () => {
       'Bessel outside of skin',
       { 'model/x.ts': 'export const besselI = 1;\n' },
       'model/x.ts:1 "besselI": only skin knows Bessel functions',
+    ],
+    [
+      'Bessel used by the library itself',
+      { 'index.ts': "import { besselRatio } from './skin/index.ts';\nexport const r = besselRatio;\n" },
+      'index.ts:1 "besselRatio": only skin knows Bessel functions',
     ],
     [
       'the package of that name',
