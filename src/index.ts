@@ -10,6 +10,7 @@ export {
   fitFrequencies,
   fitSections,
   type LoopSamples,
+  loneWireCircuit,
   type Section,
   type SectionCircuit,
   type SectionModel,

@@ -18,6 +18,10 @@ export function complexInductance(
   const { inductance } = point;
   let re = 0;
   let im = 0;
+  const add = (ar: number, ai: number, br: number, bi: number) => {
+    re += ar * br - ai * bi;
+    im += ar * bi + ai * br;
+  };
   for (let i = 0; i < n; i++) {
     let vr = 0;
     let vi = 0;
@@ -28,34 +32,9 @@ export function complexInductance(
       vi += lr * b.currents.im[j] + li * b.currents.re[j];
     }
     // Half of each order: the two agree up to the residual, their mean is symmetric to the bit.
-    re += product(
-      a.currents.re[i],
-      a.currents.im[i],
-      vr + b.multipoles.orderZero.re[i] / 2,
-      vi + b.multipoles.orderZero.im[i] / 2,
-      true,
-    );
-    im += product(
-      a.currents.re[i],
-      a.currents.im[i],
-      vr + b.multipoles.orderZero.re[i] / 2,
-      vi + b.multipoles.orderZero.im[i] / 2,
-      false,
-    );
-    re += product(
-      b.currents.re[i],
-      b.currents.im[i],
-      a.multipoles.orderZero.re[i] / 2,
-      a.multipoles.orderZero.im[i] / 2,
-      true,
-    );
-    im += product(
-      b.currents.re[i],
-      b.currents.im[i],
-      a.multipoles.orderZero.re[i] / 2,
-      a.multipoles.orderZero.im[i] / 2,
-      false,
-    );
+    const [za, zb] = [a.multipoles.orderZero, b.multipoles.orderZero];
+    add(a.currents.re[i], a.currents.im[i], vr + zb.re[i] / 2, vi + zb.im[i] / 2);
+    add(b.currents.re[i], b.currents.im[i], za.re[i] / 2, za.im[i] / 2);
   }
   const [ar, ai] = pairing(a.multipoles.scaled, b.multipoles.residual);
   const [br, bi] = pairing(b.multipoles.scaled, a.multipoles.residual);
@@ -74,8 +53,4 @@ export function complexInductance(
   }
   out[0] = re;
   out[1] = im;
-}
-
-function product(ar: number, ai: number, br: number, bi: number, real: boolean): number {
-  return real ? ar * br - ai * bi : ar * bi + ai * br;
 }
