@@ -12,6 +12,8 @@ interface Value {
   inputs: Record<string, number | string>;
   value: number;
   printed: string;
+  two_d_value?: number;
+  rel_dev?: number;
 }
 interface Group {
   id: string;
@@ -55,6 +57,18 @@ describe('two-wire lines', () => {
     const { L } = pair(a_m, D_m, 0, { relativePermeability: mu_r });
     // mH/km
     expect(Math.abs(L * 1e6 - v.value)).toBeLessThanOrEqual(lastDigit(v.printed));
+  });
+
+  // IEC 60287-1-1 (2006/2014) for two-core cables; beside it 2-D values of another multipole program, confirmed by filaments
+  it.each(group('iec60287-two-core-proximity').values)('ac/dc ratio of two cores, $inputs', (v) => {
+    const { x, s_over_d } = v.inputs as Record<string, number>;
+    const a = 1e-3;
+    // x = a sqrt(omega mu sigma)
+    const frequency = (x / a) ** 2 / (4e-7 * Math.PI * COPPER * 2 * Math.PI);
+    const ratio = pair(a, 2 * a * s_over_d, frequency).R / (2 / (Math.PI * a * a * COPPER));
+    expect(Math.abs(ratio - (v.two_d_value as number))).toBeLessThanOrEqual(0.6e-6);
+    // the known excess of the formula, printed with five decimals
+    expect(Math.abs(v.value / ratio - 1 - (v.rel_dev as number))).toBeLessThanOrEqual(1e-5);
   });
 
   it('three phases 2, 2 and 4 m apart, transposed: 1.11 mH/km a phase (Mehta 1982)', () => {
