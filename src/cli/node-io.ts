@@ -1,9 +1,9 @@
 /** The real machine: file descriptors, signals, clock. */
 import { writeSync } from 'node:fs';
 import { isatty } from 'node:tty';
-import { frequencyTable } from '../sweep/index.ts';
 import { nodeFiles } from './files.ts';
 import type { Io, OutputStream } from './io.ts';
+import { solveOnNode } from './node-solve.ts';
 
 /** [ms] between two tries on a pipe that is full and does not block. */
 const PIPE_WAIT = 5;
@@ -15,7 +15,7 @@ export function nodeIo(): Io {
     stderr: output(2),
     files: nodeFiles(),
     env: process.env,
-    solve: frequencyTable,
+    solve: solveOnNode,
     now: () => performance.now(),
     turn: () => new Promise((resolve) => setImmediate(resolve)),
     onInterrupt: (callback) => {

@@ -16,6 +16,10 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { readCase } from '../../src/input/index.ts';
+import type { Case } from '../../src/model/index.ts';
+import { frequencyTable } from '../../src/sweep/index.ts';
+import { tableText } from '../../src/writers/index.ts';
 import { PAIR } from './fake-io.ts';
 
 const cli = fileURLToPath(new URL('../../dist/cli', import.meta.url));
@@ -197,22 +201,60 @@ describe('Ctrl-C', () => {
       err: 'INTERRUPTED stopped by Ctrl-C\n',
     });
   });
-  it('while solving: 130, no result, nothing left of --out', async () => {
-    // 61 wires in close rows at 300 frequencies take far longer than the signal
+  /** Wires in close rows, one half go and the other return. */
+  function rows(count: number, pitch: number): string {
     const wires = Array.from(
-      { length: 61 },
-      (_, i) => `  w${i}: { diameter: 1 mm, at: [${1.02 * (i % 8)} mm, ${1.02 * Math.floor(i / 8)} mm] }`,
+      { length: count },
+      (_, i) => `  w${i}: { diameter: 1 mm, at: [${pitch * (i % 8)} mm, ${pitch * Math.floor(i / 8)} mm] }`,
     );
     const names = wires.map((_, i) => `w${i}`);
-    const text = `rimflow: 1\nwires:\n${wires.join('\n')}\nloops:\n  all: { go: [${names.slice(0, 30)}], return: [${names.slice(30)}] }\nfrequencies: { from: 1 Hz, to: 1 GHz, count: 300 }\n`;
-    writeFileSync(join(folder, 'many.yaml'), text);
-    expect(await interrupted(['table', 'many.yaml', '--out', 'many.csv'], 2000, 'ignore')).toEqual({
+    const half = count >> 1;
+    const loop = `{ go: [${names.slice(0, half)}], return: [${names.slice(half)}] }`;
+    return `rimflow: 1\nwires:\n${wires.join('\n')}\nloops: { all: ${loop} }\nfrequencies: { from: 1 Hz, to: 1 GHz, count: 300 }\n`;
+  }
+  it.each([
+    ['many frequencies', 61, 1.02],
+    // tables and one frequency take many seconds
+    ['one long frequency', 200, 1.002],
+  ])('while solving %s: 130 at once, no result, nothing left of --out', async (_what, count, pitch) => {
+    writeFileSync(join(folder, 'many.yaml'), rows(count, pitch));
+    const start = performance.now();
+    const after = 2000;
+    expect(await interrupted(['table', 'many.yaml', '--out', 'many.csv'], after, 'ignore')).toEqual({
       status: 130,
       out: '',
       err: 'INTERRUPTED stopped by Ctrl-C\n',
     });
+    // a second and a half of another load on the machine
+    expect(performance.now() - start).toBeLessThan(after + 1500);
     expect(existsSync(join(folder, 'many.csv'))).toBe(false);
     expect(leftovers()).toEqual([]);
+  });
+});
+
+describe('a large case, solved in a thread', () => {
+  const wires = Array.from({ length: 14 }, (_, i) => `  w${i}: { diameter: 1 mm, at: [${2 * i} mm, 0 mm] }`);
+  const text = (more: string) =>
+    `rimflow: 1\nwires:\n${wires.join('\n')}\nloops: { all: { go: w0, return: w13 } }\nfrequencies: [0 Hz, 1 MHz]\n${more}`;
+  it('has the numbers of the library', async () => {
+    writeFileSync(join(folder, 'row.yaml'), text(''));
+    const { status, out, err } = command(['table', 'row.yaml']);
+    expect([status, err]).toEqual([0, '']);
+    const read = await readCase(text(''), { file: 'row.yaml' });
+    expect(out).toBe(tableText(await frequencyTable(read.case as Case), 'csv'));
+  });
+  it('says what it could not reach: 3', () => {
+    // rounding at orders of many hundreds
+    const hard = text('tolerance: 1e-12\n')
+      .replace('2 mm, 0 mm', '1.001 mm, 0 mm')
+      .replace('return: w13', 'return: w1')
+      .replace('1 MHz', '1 THz');
+    writeFileSync(join(folder, 'row.yaml'), hard);
+    const { status, out, err } = command(['table', 'row.yaml']);
+    expect([status, err.includes('\nNOT_REACHED the wanted tolerance 1e-12')]).toEqual([3, true]);
+    expect(out).toMatch(
+      /^frequency_Hz,all_R_ohm_per_m,all_L_H_per_m,all_R_error,all_L_error\r\n0,.*\r\n1000000000000,/,
+    );
   });
 });
 
