@@ -45,7 +45,7 @@ function origin() {
 
 async function bundleCommand(folder) {
   const bundle = await rolldown({
-    input: { bin: join(root, 'src/cli/bin.ts') },
+    input: { bin: join(root, 'src/cli/bin.ts'), 'solve-worker': join(root, 'src/cli/solve-worker.ts') },
     platform: 'node',
     logLevel: 'warn',
   });
@@ -60,10 +60,41 @@ async function bundleCommand(folder) {
   chmodSync(join(folder, 'cli/bin.js'), 0o755);
 }
 
+/** What users and tests enter by: a build without one of them is none. */
+const ENTRIES = ['index.js', 'index.d.ts', 'cli/bin.js', 'cli/solve-worker.js', 'input/case.schema.json'];
+
+function isFresh(madeOf) {
+  const whole = [stamp, ...ENTRIES.map((name) => join(dist, name))].every((file) => existsSync(file));
+  return whole && readFileSync(stamp, 'utf8') === madeOf;
+}
+
+/** [1] tries to swap while another build does the same */
+const SWAPS = 20;
+
+/** Puts the new build in the place of the old one, which comes back where that fails. */
+async function swapIn(beside, old) {
+  for (let attempt = 1; ; attempt++) {
+    try {
+      if (existsSync(dist)) renameSync(dist, old);
+      try {
+        renameSync(beside, dist);
+      } catch (error) {
+        if (existsSync(old) && !existsSync(dist)) renameSync(old, dist);
+        throw error;
+      }
+      return;
+    } catch (error) {
+      // another build took the old one away, or put its own there, between two steps
+      const another = ['ENOENT', 'ENOTEMPTY', 'EEXIST'].includes(error.code) && existsSync(beside);
+      if (!another || attempt === SWAPS) throw error;
+      rmSync(old, { recursive: true, force: true });
+      await new Promise((resolve) => setTimeout(resolve, 50));
+    }
+  }
+}
+
 const madeOf = origin();
-const fresh =
-  process.argv.includes('--if-stale') && existsSync(stamp) && readFileSync(stamp, 'utf8') === madeOf;
-if (!fresh) {
+if (!(process.argv.includes('--if-stale') && isFresh(madeOf))) {
   const beside = join(root, 'node_modules', `.build-${process.pid}`);
   const old = `${beside}-old`;
   try {
@@ -75,8 +106,7 @@ if (!fresh) {
     copyFileSync(join(root, 'src/input/case.schema.json'), join(beside, 'input/case.schema.json'));
     await bundleCommand(beside);
     writeFileSync(join(beside, '.made-of'), madeOf);
-    if (existsSync(dist)) renameSync(dist, old);
-    renameSync(beside, dist);
+    await swapIn(beside, old);
   } catch (error) {
     // tsc has said what is wrong; anything else has not
     if (error.status === undefined) process.stderr.write(`${error.stack}\n`);
