@@ -4,7 +4,10 @@
  */
 import { expect, it } from 'vitest';
 import ledger from '../../fixtures/solver/ledger.json' with { type: 'json' };
+import { impedanceAt, prepareCase } from '../../src/loops/index.ts';
+import { seeded } from './case-builder.ts';
 import { LAYOUTS, LAYOUTS_SEED, measureHonesty, TOLERANCE } from './measure.ts';
+import { randomLayout } from './random-layouts.ts';
 
 it(`holds over ${LAYOUTS} random layouts, seed ${LAYOUTS_SEED}`, () => {
   const { ratio, largest, failures, worst } = measureHonesty();
@@ -17,4 +20,31 @@ it(`holds over ${LAYOUTS} random layouts, seed ${LAYOUTS_SEED}`, () => {
   expect(ratio, 'better, record it').toBeGreaterThan(ledger.random.ratio / 4);
   expect(largest).toBeLessThanOrEqual(1.25 * ledger.random.largest);
   expect(largest, 'better, record it').toBeGreaterThan(ledger.random.largest / 4);
+});
+
+const ROUNDING_SEED = 99;
+
+it(`rounding: the wires in another order differ by no more than both state, seed ${ROUNDING_SEED}`, () => {
+  const random = seeded(ROUNDING_SEED);
+  let worst = 0;
+  for (let k = 0; k < 80; k++) {
+    const { case: layout, frequency } = randomLayout(random);
+    // all that is left of the error is rounding
+    const c = { ...layout, tolerance: 1e-12 };
+    const back = (i: number) => c.wires.length - 1 - i;
+    const [loop] = c.loops;
+    const turned = {
+      ...c,
+      wires: [...c.wires].reverse(),
+      loops: [{ ...loop, go: loop.go.map(back), return: loop.return.map(back) }],
+    };
+    const [a, b] = [c, turned].map((each) => impedanceAt(prepareCase(each, frequency), frequency));
+    worst = Math.max(
+      worst,
+      Math.abs(a.resistance[0] / b.resistance[0] - 1) / (a.resistanceError[0] + b.resistanceError[0]),
+      Math.abs(a.inductance[0] / b.inductance[0] - 1) / (a.inductanceError[0] + b.inductanceError[0]),
+    );
+  }
+  console.log(`seed ${ROUNDING_SEED}: difference over stated errors ${worst.toPrecision(2)}`);
+  expect(worst).toBeLessThan(1);
 });
