@@ -106,11 +106,8 @@ export function logByDecade(from: number, to: number, perDecade: number): number
 }
 
 function logByCount(from: number, to: number, count: number): number[] {
-  const ratio = Math.log(to / from);
-  const points = Array.from(
-    { length: count },
-    (_, k) => from * Math.exp((ratio * k) / Math.max(1, count - 1)),
-  );
+  // a power, not exp and log: whole decades and halves of them come out exact
+  const points = Array.from({ length: count }, (_, k) => from * (to / from) ** (k / Math.max(1, count - 1)));
   points[count - 1] = to;
   return distinct(points);
 }

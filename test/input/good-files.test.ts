@@ -197,6 +197,16 @@ frequencies: { from: 20 Hz, to: 1 kHz, per_decade: 3 }`);
   expect(c.frequencies.map((f) => Math.round(f))).toEqual([20, 43, 93, 200, 431, 928, 1000]);
 });
 
+it('steps by count through round numbers without noise in the last digits', async () => {
+  const c = await caseOf(`rimflow: 1
+wires:
+  a: { diameter: 1 mm, at: [0 mm, 0 mm] }
+  b: { diameter: 1 mm, at: [2 mm, 0 mm] }
+loops: { pair: { go: a, return: b } }
+frequencies: { from: 50 Hz, to: 5 kHz, count: 5 }`);
+  expect([c.frequencies[0], c.frequencies[2], c.frequencies[4]]).toEqual([50, 500, 5000]);
+});
+
 describe('touching', () => {
   const two = (a: string, b: string) => `rimflow: 1
 wires:
