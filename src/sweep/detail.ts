@@ -5,8 +5,8 @@
  * sum |i_k|^2 L_k (energy of the wires' own field; L_k by Schelkunoff 1934). The external one is the rest of L, so it
  * holds the field between the wires and, with proximity effect, what the neighbours change inside of them.
  */
-import { type Case, MU0, type Wire } from '../model/index.ts';
-import { solidInternalInductance } from '../skin/index.ts';
+import type { Case, Wire } from '../model/index.ts';
+import { skinDepth, solidInternalInductance } from '../skin/index.ts';
 import type { FrequencyTable } from './table.ts';
 
 /** Details of one loop; arrays have one entry a frequency. */
@@ -77,10 +77,9 @@ function skinDepths(wires: readonly Wire[], frequency: Float64Array): SkinDepthS
   const kinds = [...different.values()];
   return kinds.map((wire) => {
     const alike = kinds.filter(({ material }) => material === wire.material).length;
-    const product = Math.PI * MU0 * wire.relativePermeability * wire.conductivity;
     return {
       name: alike === 1 ? wire.material : `${wire.material}.${wire.name}`,
-      depth: frequency.map((f) => 1 / Math.sqrt(product * f)),
+      depth: frequency.map((f) => skinDepth(wire, 2 * Math.PI * f)),
     };
   });
 }
