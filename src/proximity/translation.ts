@@ -40,13 +40,19 @@ export interface TranslationOptions {
  */
 const NEGLIGIBLE = 1e-15;
 
+/**
+ * [1] Least decay that counts for that. What is dropped of a row also enters the coefficient of that order, in the
+ * impedance by its square: NEGLIGIBLE over this bounds it, 1e-10, however far the orders go.
+ */
+const LEAST_DECAY = 1e-5;
+
 export function translationTable(o: TranslationOptions): TranslationTable {
   const { u, v } = o;
   const most = o.ordersJ;
   const first = new Int32Array(o.ordersI);
   const start = new Int32Array(o.ordersI + 1);
   const falling = new Float64Array(most + 1);
-  for (let m = 1; m <= most; m++) falling[m] = Math.exp(-o.alphaJ * m);
+  for (let m = 1; m <= most; m++) falling[m] = Math.max(LEAST_DECAY, Math.exp(-o.alphaJ * m));
   // p(n-1, m-1) over m for the current n
   const p = new Float64Array(most + 1);
   p[0] = 1;
@@ -60,7 +66,7 @@ export function translationTable(o: TranslationOptions): TranslationTable {
       p[0] *= u;
       for (let m = 1; m <= most; m++) p[m] = u * p[m] + v * p[m - 1];
     }
-    const fallingI = Math.exp(-o.alphaI * n);
+    const fallingI = Math.max(LEAST_DECAY, Math.exp(-o.alphaI * n));
     let from = -1;
     let to = 0;
     for (let m = 1; m <= most; m++) {

@@ -8,6 +8,7 @@ import { impedanceAt, prepareCase } from '../../src/loops/index.ts';
 import { seeded } from './case-builder.ts';
 import { LAYOUTS, LAYOUTS_SEED, measureHonesty, TOLERANCE } from './measure.ts';
 import { randomLayout } from './random-layouts.ts';
+import { wildLayout } from './wild-layouts.ts';
 
 it(`holds over ${LAYOUTS} random layouts, seed ${LAYOUTS_SEED}`, () => {
   const { ratio, largest, failures, worst } = measureHonesty();
@@ -47,4 +48,41 @@ it(`rounding: the wires in another order differ by no more than both state, seed
   }
   console.log(`seed ${ROUNDING_SEED}: difference over stated errors ${worst.toPrecision(2)}`);
   expect(worst).toBeLessThan(1);
+});
+
+const WILD_SEED = 1;
+const WILD = 100;
+
+it(`holds over ${WILD} wild layouts at tolerances from 1e-2 to 1e-10, mutual terms too, seed ${WILD_SEED}`, () => {
+  const random = seeded(WILD_SEED);
+  const worst = { own: 0, mutual: 0 };
+  let mutual = 0;
+  for (let k = 0; k < WILD; k++) {
+    const { case: c, frequency } = wildLayout(random, [1e-2, 1e-3, 1e-5, 1e-8, 1e-10][k % 5]);
+    const z = impedanceAt(prepareCase(c, frequency), frequency);
+    const y = impedanceAt(prepareCase({ ...c, tolerance: 1e-12 }, frequency), frequency);
+    const n = c.loops.length;
+    for (let a = 0; a < n; a++) {
+      const own = (mine: Float64Array, other: Float64Array, stated: Float64Array, told: Float64Array) => {
+        const at = a * n + a;
+        const scale = other[at] === 0 ? 1 : Math.abs(other[at]);
+        return Math.abs(mine[at] - other[at]) / scale / (stated[a] + told[a]);
+      };
+      const r = own(z.resistance, y.resistance, z.resistanceError, y.resistanceError);
+      const l = own(z.inductance, y.inductance, z.inductanceError, y.inductanceError);
+      expect(Math.max(r, l), `layout ${k}, loop ${a}, ${frequency} Hz`).toBeLessThanOrEqual(1);
+      worst.own = Math.max(worst.own, r, l);
+    }
+    if (n < 2) continue;
+    const difference = Math.abs(z.inductance[1] - y.inductance[1]);
+    const scale = Math.sqrt(y.inductance[0] * y.inductance[3]);
+    worst.mutual = Math.max(worst.mutual, difference / scale / (z.mutualError[1] + y.mutualError[1]));
+    mutual++;
+  }
+  console.log(
+    `seed ${WILD_SEED}: worst over stated ${worst.own.toPrecision(2)}, mutual ${worst.mutual.toPrecision(2)}`,
+  );
+  expect(mutual).toBeGreaterThan(30);
+  expect(worst.mutual).toBeLessThanOrEqual(1);
+  expect(worst.mutual).toBeGreaterThan(0);
 });
