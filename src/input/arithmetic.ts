@@ -4,10 +4,11 @@ import { Fault } from './fault.ts';
 import { MAX_EXPONENT } from './limits.ts';
 import type { Quantity } from './quantity.ts';
 
-const plain = (value: number, dimension: Dimension): Quantity => ({
+const plain = (value: number, dimension: Dimension, ...from: readonly Quantity[]): Quantity => ({
   value,
   dimension,
   celsius: false,
+  difference: from.some(({ difference }) => difference === true),
 });
 
 function combine(a: Dimension, b: Dimension, sign: number): Dimension {
@@ -40,6 +41,7 @@ export function add(a: Quantity, b: Quantity): Quantity {
     value: a.value + b.value,
     dimension: a.dimension,
     celsius: a.celsius || b.celsius,
+    difference: !(a.celsius || b.celsius) && (a.difference === true || b.difference === true),
   };
 }
 
@@ -51,21 +53,22 @@ export function subtract(a: Quantity, b: Quantity): Quantity {
     value: a.value - b.value,
     dimension: a.dimension,
     celsius: a.celsius && !b.celsius,
+    difference: b.celsius || (!a.celsius && (a.difference === true || b.difference === true)),
   };
 }
 
 export function multiply(a: Quantity, b: Quantity): Quantity {
-  return plain(notCelsius(a).value * notCelsius(b).value, combine(a.dimension, b.dimension, 1));
+  return plain(notCelsius(a).value * notCelsius(b).value, combine(a.dimension, b.dimension, 1), a, b);
 }
 
 /** Throws RANGE for a division by zero. */
 export function divide(a: Quantity, b: Quantity): Quantity {
   if (b.value === 0) throw new Fault('RANGE', 'a division by zero');
-  return plain(notCelsius(a).value / notCelsius(b).value, combine(a.dimension, b.dimension, -1));
+  return plain(notCelsius(a).value / notCelsius(b).value, combine(a.dimension, b.dimension, -1), a, b);
 }
 
 export function negate(a: Quantity): Quantity {
-  return plain(-notCelsius(a).value, a.dimension);
+  return plain(-notCelsius(a).value, a.dimension, a);
 }
 
 /** The exponent is a number without unit, of magnitude up to MAX_EXPONENT. */

@@ -60,11 +60,36 @@ export function safeExpression(text: string): string {
       `can not read ${quote(text)}: ${why}; inside [ ] and { } put commas in quotes`,
     );
   }
-  return dropUnitOne(tokens).join(' ');
+  const plain = dropUnitOne(tokens);
+  refuseSideBySide(text, plain);
+  return plain.join(' ');
 }
 
-/** `0.0039 1/K` is how people write a reciprocal unit: the 1 after a number goes. */
+const isNumber = (token: string | undefined) => token !== undefined && /^[\d.]/.test(token);
+const isName = (token: string | undefined) => token !== undefined && /^[A-Za-z_]/.test(token);
+
+/** `0.0039 1/K` is how people write a reciprocal unit: the 1 after a number and before a unit goes. */
 function dropUnitOne(tokens: readonly string[]): string[] {
-  const isNumber = (token: string | undefined) => token !== undefined && /^[\d.]/.test(token);
-  return tokens.filter((t, k) => !(t === '1' && isNumber(tokens[k - 1]) && tokens[k + 1] === '/'));
+  return tokens.filter(
+    (t, k) => !(t === '1' && isNumber(tokens[k - 1]) && tokens[k + 1] === '/' && isName(tokens[k + 2])),
+  );
+}
+
+/** What stands side by side is multiplied, which is not what `1 1/2 mm` and `g % 2` mean. */
+function refuseSideBySide(text: string, tokens: readonly string[]): void {
+  for (let k = 1; k < tokens.length; k++) {
+    const [before, token] = [tokens[k - 1], tokens[k]];
+    if (isNumber(before) && isNumber(token)) {
+      throw new Fault(
+        'EXPRESSION',
+        `can not read ${quote(text)}: the numbers ${before} and ${token} side by side; write 1.5 mm or (1 + 1/2) mm`,
+      );
+    }
+    if (before === 'percent' && (isNumber(token) || isName(token) || token === '(')) {
+      throw new Fault(
+        'EXPRESSION',
+        `can not read ${quote(text.replaceAll('percent', '%'))}: % means a hundredth and stands after a number; write 50 % * gap; there is no remainder`,
+      );
+    }
+  }
 }

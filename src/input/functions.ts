@@ -58,7 +58,7 @@ const squareRoot: Call = (args, name) => {
 
 const magnitude: Call = (args, name) => {
   const x = only(args, name);
-  return plain(Math.abs(x.value), x.dimension);
+  return { ...x, value: Math.abs(x.value) };
 };
 
 /** A map, not an object: no name can reach what every object inherits. */

@@ -13,6 +13,8 @@ export interface Quantity {
   readonly dimension: Dimension;
   /** true for a temperature written in °C: a point on the scale, which can not be added to another point */
   readonly celsius: boolean;
+  /** true for what came of a difference of two points of the scale: 40 K between 60 °C and 20 °C, no temperature */
+  readonly difference?: boolean;
 }
 
 const NUMBER = /^([+-]?(?:\d+\.?\d*|\.\d+))(?:e([+-]?\d+))?(?![\w.])/i;
@@ -65,6 +67,13 @@ export function valueIn(family: Family, quantity: Quantity, shown: string): numb
     );
   }
   if (family !== 'temperature') return quantity.value;
+  if (quantity.difference === true) {
+    const kelvin = Number(quantity.value.toPrecision(6));
+    throw new Fault(
+      'UNIT',
+      `${shown} is a difference of temperatures, ${kelvin} K; to shift a temperature give the shift in K: Ta - 20 K`,
+    );
+  }
   // the way to kelvin and back leaves rounding in the fourteenth digit, which would show in a table of inputs
   return Math.round((quantity.value - ZERO_CELSIUS) * 1e10) / 1e10;
 }

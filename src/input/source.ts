@@ -20,6 +20,8 @@ export function valueAt(data: unknown, path: Path): unknown {
   let value = data;
   for (const key of path) {
     if (value === null || typeof value !== 'object' || !Object.hasOwn(value, key)) return undefined;
+    // a list has places, no names: its own length is no key of the file
+    if (Array.isArray(value) && typeof key === 'string') return undefined;
     value = (value as Record<string | number, unknown>)[key];
   }
   return value;

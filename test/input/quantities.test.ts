@@ -64,6 +64,9 @@ const VALUES: [Family, string, number][] = [
   ['temperature', '20 °C + (60 °C - 20 °C)', 60],
   ['temperature', 'max(20 °C, 60 °C)', 60],
   ['temperature', '-40 °C + 10 K', -30],
+  ['temperature', '20 °C + 2 * (60 °C - 20 °C)', 100],
+  ['temperature', '60 °C - (60 °C - 20 °C)', 20],
+  ['temperature', '300 K - 26.85 K', 0],
   ['frequency', '50 Hz', 50],
   ['frequency', '1 kHz', 1e3],
   ['frequency', '100 MHz', 1e8],
@@ -253,8 +256,31 @@ describe('refusals', () => {
     '5 K - 3 °C',
     '30 °C^2',
     'max(3 °C, 5 K)',
+    'abs(5 K - 3 °C)',
   ])('takes no arithmetic on points of the Celsius scale: %s', async (text) => {
     expect(await codeOf(text, 'temperature')).toMatch(/^(EXPRESSION|UNIT|RANGE) /);
+  });
+});
+
+describe('what would be read as something else', () => {
+  it.each([
+    ['1 1/2 mm', 'the numbers 1 and 1 side by side'],
+    ['2 500 mm', 'the numbers 2 and 500 side by side'],
+    ['3 mm + 2 1/2 mm', 'the numbers 2 and 1 side by side'],
+    ['7 mm % 2', '% means a hundredth'],
+    ['50 % (3 mm)', '% means a hundredth'],
+    ['50 % pi * 1 mm', '% means a hundredth'],
+  ])('%s is refused', async (text, why) => {
+    expect(await codeOf(text)).toContain(`EXPRESSION can not read "${text}": ${why}`);
+  });
+  it.each([
+    '60 °C - 20 °C',
+    '2 * (60 °C - 20 °C)',
+    'abs(20 °C - 60 °C)',
+    '(60 °C - 20 °C) + 5 K',
+    '-(20 °C - 60 °C)',
+  ])('a difference is no temperature: %s', async (text) => {
+    expect(await codeOf(text, 'temperature')).toMatch(/^UNIT .* is a difference of temperatures, \d+ K; /);
   });
 });
 
