@@ -107,17 +107,22 @@ function assemble(
   const resistanceIncrement = new Float64Array(loops * loops);
   const inductance = new Float64Array(loops * loops);
   const l = new Float64Array(2);
+  // perfect conductors alone lose nothing: what the sums leave of it is rounding
+  const lossless = circuit.wireResistance.every((r) => r === 0);
   for (let a = 0; a < loops; a++) {
     for (let b = a; b < loops; b++) {
       complexInductance(point, circuit.wireResistance, excitations[a], excitations[b], l);
       for (const at of [a * loops + b, b * loops + a]) {
-        resistanceIncrement[at] = scale === 0 ? 0 : -scale * l[1];
+        resistanceIncrement[at] = scale === 0 || lossless ? 0 : -scale * l[1];
         resistance[at] = circuit.directResistance[at] + resistanceIncrement[at];
         inductance[at] = INDUCTANCE_UNIT * l[0];
       }
     }
   }
-  const errors = excitations.map((e) => inductanceError(point, alpha, e));
+  const errors = excitations.map((e) => {
+    const error = inductanceError(point, alpha, e);
+    return lossless ? { ...error, im: 0 } : error;
+  });
   const diagonal = (m: Float64Array, k: number) => m[k * loops + k];
   const relative = (error: number, value: number) => (value === 0 ? error : error / Math.abs(value));
   const rounding = 4 * Number.EPSILON;
@@ -129,6 +134,7 @@ function assemble(
   const inductanceErrors = Float64Array.from(
     errors,
     (e, k) =>
+      rounding +
       relative(INDUCTANCE_UNIT * e.re, diagonal(inductance, k)) +
       logarithmRounding(prepared, inductance, k, loops),
   );

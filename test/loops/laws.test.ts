@@ -221,6 +221,21 @@ describe('limits', () => {
     }
   });
 
+  it('perfect conductors alone lose nothing, however many and however close: R is zero, not rounding', () => {
+    const perfect = { conductivity: Number.POSITIVE_INFINITY };
+    const wires = [
+      wire(0, 0, 1.5e-3, perfect),
+      wire(2.01e-3, 0, 0.5e-3, perfect),
+      wire(-4e-3, 1e-3, 1e-3, perfect),
+    ];
+    for (const f of [0, 1e3, 1e9]) {
+      const z = solve(caseOf(wires, [loop([0], [2]), loop([1], [2])]), f);
+      expect(z.reached).toBe(true);
+      expect([...z.resistance, ...z.resistanceError]).toEqual([0, 0, 0, 0, 0, 0]);
+      expect(Math.max(...z.inductanceError)).toBeLessThanOrEqual(1e-8);
+    }
+  });
+
   it('unequal perfect conductors: L = (mu0/2pi) acosh((d^2 - a^2 - b^2)/2ab) (Smythe 1950, section 4.13)', () => {
     const perfect = { conductivity: Number.POSITIVE_INFINITY };
     for (const [a, b, gap] of [
