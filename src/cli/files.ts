@@ -3,6 +3,7 @@ import { randomBytes } from 'node:crypto';
 import {
   closeSync,
   fsyncSync,
+  lstatSync,
   openSync,
   realpathSync,
   renameSync,
@@ -76,10 +77,10 @@ async function readUpTo(
 }
 
 export function tooLarge(file: string, limit: number, size?: number): Problem {
-  const found = size === undefined ? 'more' : `${(size / 1e6).toFixed(1)} MB`;
+  const found = size === undefined ? 'this is' : `${(size / 1e6).toFixed(1)} MB are`;
   return new Problem(
     'TOO_LARGE',
-    `${found} than a cross-section file may have; the limit is ${limit / 1e6} MB`,
+    `${found} more than a cross-section file may have; the limit is ${limit / 1e6} MB`,
     {
       file,
     },
@@ -125,6 +126,15 @@ function writeWhole(path: string, text: string): void {
       writeAndClose(openSync(path, 'w'), text, false);
       return;
     }
+    if (found === undefined && lstatSync(path, { throwIfNoEntry: false }) !== undefined) {
+      throw new Problem(
+        'WRITE_FAILED',
+        'is a link to a file that is not there; make that file, or name another',
+        {
+          file: path,
+        },
+      );
+    }
     // behind a link stands the file that is meant
     const target = found === undefined ? path : realpathSync(path);
     const beside = `${target}.${randomBytes(4).toString('hex')}.unfinished`;
@@ -137,7 +147,7 @@ function writeWhole(path: string, text: string): void {
       throw error;
     }
   } catch (error) {
-    throw writeProblem(path, error);
+    throw error instanceof Problem ? error : writeProblem(path, error);
   }
 }
 

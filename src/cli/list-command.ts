@@ -46,7 +46,7 @@ function materials(): ListColumn[] {
   return [
     { name: 'name', values: list(({ name }) => name) },
     { name: 'resistivity_nohm_m', values: list(({ resistivity }) => digits(1e9 * resistivity)) },
-    { name: 'coefficient_per_K', values: list((metal) => metal.temperatureCoefficient) },
+    { name: 'coefficient_per_K', values: list((metal) => digits(metal.temperatureCoefficient)) },
     { name: 'at_C', values: list((metal) => metal.referenceTemperature) },
     { name: 'relative_permeability', values: list((metal) => metal.relativePermeability) },
     { name: 'other_names', values: list(({ aliases }) => aliases.join(' ')) },
@@ -55,5 +55,5 @@ function materials(): ListColumn[] {
 }
 
 function digits(value: number): number {
-  return Number(value.toPrecision(5));
+  return Number(value.toPrecision(7));
 }

@@ -19,6 +19,8 @@ export interface QuickOptions {
   readonly temperature?: string;
   readonly insulation?: string;
   readonly length?: string;
+  readonly from?: string;
+  readonly to?: string;
   readonly tolerance?: string;
 }
 
@@ -30,6 +32,8 @@ export const QUICK_OPTIONS = [
   'temperature',
   'insulation',
   'length',
+  'from',
+  'to',
   'tolerance',
 ] as const satisfies readonly (keyof QuickOptions)[];
 

@@ -6,9 +6,11 @@ import { reason } from './files.ts';
 import type { Io } from './io.ts';
 import type { CommonOptions } from './options.ts';
 
-/** A path of `-` means standard output, as for input. */
+/** `-` means standard output, as for input; so do its names in the file system, where a file may stand behind it. */
+const STANDARD_OUTPUT: readonly (string | undefined)[] = ['-', '/dev/stdout', '/dev/fd/1', '/proc/self/fd/1'];
+
 export function outPath({ out }: CommonOptions): string | undefined {
-  return out === '-' ? undefined : out;
+  return STANDARD_OUTPUT.includes(out) ? undefined : out;
 }
 
 /** Refuses a path that can not be written before anything is computed. */

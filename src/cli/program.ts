@@ -26,6 +26,7 @@ export async function runProgram(argv: readonly string[], io: Io): Promise<numbe
     )
     .version(VERSION, '--version', 'print the version')
     .helpOption('-h, --help', 'print this help')
+    .helpCommand(false)
     .exitOverride()
     .configureOutput({
       writeOut: (text) => {
@@ -60,9 +61,9 @@ export async function runProgram(argv: readonly string[], io: Io): Promise<numbe
 
   withQuickOptions(
     withCommonOptions(program.command('netlist'), ['spice'])
-      .summary('a subcircuit for a SPICE-type simulator')
+      .summary('a subcircuit of one loop for a SPICE-type simulator')
       .description(
-        'A subcircuit of resistors and inductors for the length of the run, over the band of its frequencies.',
+        'A subcircuit of resistors and inductors for the length of the run, over the band of its frequencies. For cases of one loop.',
       )
       .argument('[FILE]', 'cross-section file; - reads standard input')
       .option('--sections <N>', 'number of sections')
@@ -148,6 +149,8 @@ function withQuickOptions(command: Command): Command {
     .option('--temperature <T>', 'of the metal (default: 20 °C)')
     .option('--insulation <LENGTH>', 'its thickness')
     .option('--length <LENGTH>', 'length of the run')
+    .option('--from <FREQUENCY>', 'lowest frequency (default: 10 Hz)')
+    .option('--to <FREQUENCY>', 'highest frequency, 10 points a decade (default: 100 MHz)')
     .option('--tolerance <ERROR>', 'wanted relative error (default: 1e-8)');
 }
 

@@ -133,5 +133,16 @@ function symbol(name: string, parser: ExpressionParser, named: NamedValues): Qua
     const unit = parser.unitOf(name);
     return { value: unit.value, dimension: unit.dimension, celsius: false };
   }
-  throw new Fault('UNIT', `${quote(name)} is neither a unit nor a let name${named.suggest(name)}`);
+  throw new Fault(
+    'UNIT',
+    `${quote(name)} is neither a unit nor a let name${hint(name) ?? named.suggest(name)}`,
+  );
+}
+
+/** What people mean that write a unit in another way. */
+function hint(name: string): string | undefined {
+  if (name === 'C') return ' (write 60 °C)';
+  if (/^(deg)?F$/.test(name)) return ' (degrees Fahrenheit are not read; convert to °C)';
+  const [, unit, exponent] = /^([a-z]+)([23])$/.exec(name) ?? [];
+  return unit !== undefined && UNIT_NAMES.has(unit) ? ` (write ${unit}^${exponent})` : undefined;
 }

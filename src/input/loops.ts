@@ -92,8 +92,10 @@ function reportUnknown(reading: Reading, name: string, index: ReadonlyMap<string
 /** @returns false for a wire on both sides, which no further check can add to */
 function checkSides(reading: Reading, name: string, go: Group, back: Group): boolean {
   const returning = new Set(back.members);
-  if (go.members.some((wire) => returning.has(wire))) {
-    const text = `loop ${quote(name)} has a wire on both sides; remove it from go or from return`;
+  const both = go.members.find((wire) => returning.has(wire));
+  if (both !== undefined) {
+    const wire = quote(reading.source.keys(['wires'])[both]);
+    const text = `loop ${quote(name)} has wire ${wire} on both sides; remove it from go or from return`;
     report(reading, 'BOTH_SIDES', text, back.path);
     return false;
   }

@@ -58,12 +58,16 @@ export interface QuickPairOptions {
   readonly temperature?: string;
   readonly insulation?: string;
   readonly length?: string;
+  /** lowest frequency */
+  readonly from?: string;
+  /** highest frequency */
+  readonly to?: string;
   readonly tolerance?: string;
 }
 
-/** Loop `pair` of wires `go` and `return`, 10 Hz to 100 MHz, 10 points a decade. @throws Problem, the first found */
+/** Loop `pair` of wires `go` and `return`, 10 Hz to 100 MHz where nothing else is said, 10 points a decade. @throws Problem, the first found */
 export async function quickPair(options: QuickPairOptions): Promise<Case> {
-  const { spacing, length, temperature, tolerance, ...size } = options;
+  const { spacing, length, temperature, tolerance, from = '10 Hz', to = '100 MHz', ...size } = options;
   const given = (values: Record<string, string | undefined>) =>
     Object.fromEntries(Object.entries(values).filter(([, value]) => value !== undefined));
   const wire = given({ ...size });
@@ -76,9 +80,13 @@ export async function quickPair(options: QuickPairOptions): Promise<Case> {
       return: { ...wire, at: [spacing, '0 mm'] },
     },
     loops: { pair: { go: 'go', return: 'return' } },
-    frequencies: { from: '10 Hz', to: '100 MHz', per_decade: 10 },
+    frequencies: { from, to, per_decade: 10 },
   };
-  const names = new Map<string, string>([['wires.return.at', '--spacing']]);
+  const names = new Map<string, string>([
+    ['wires.return.at', '--spacing'],
+    ['frequencies.from', '--from'],
+    ['frequencies.to', '--to'],
+  ]);
   for (const key of ['length', 'temperature', 'tolerance']) names.set(key, `--${key}`);
   for (const key of Object.keys(wire)) {
     names.set(`wires.go.${key}`, `--${key}`);

@@ -186,7 +186,7 @@ function cautionsOf(reading: Reading, wires: readonly WireDraft[]): Caution[] {
   const strands = wires.filter((wire) => isStrand(reading, wire));
   if (strands.length > 0) {
     const names = quoteList(strands.map((w) => w.name));
-    const text = `${names}: a strand taken as one round wire of its outer diameter and of its resistance (no lay is added); currents between its strands are not modelled`;
+    const text = `${names}: more resistance than solid metal of this diameter has: taken as a strand, one round wire of its outer diameter and of its resistance (no lay is added); currents between strands are not modelled`;
     cautions.push({ code: 'STRAND_AS_WIRE', text });
   }
   return cautions;

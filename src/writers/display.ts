@@ -74,7 +74,8 @@ function cell(column: Column, value: number, i: number, scale: Scale): string {
     case 'error':
       return value === 0 ? '0' : value.toExponential(1);
     case 'current':
-      return value.toFixed(CURRENT_DECIMALS);
+      // no minus before a zero
+      return value.toFixed(CURRENT_DECIMALS).replace(/^-(0\.0*)$/, '$1');
     default: {
       const digits = column.errors === undefined ? DETAIL_DIGITS : digitsWithin(column.errors[i]);
       return fixed(value, scale, digits);

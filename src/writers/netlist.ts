@@ -4,7 +4,7 @@
  * cases give equal files.
  */
 import type { SectionModel } from '../fit/index.ts';
-import type { LumpedExtra } from '../model/index.ts';
+import { type LumpedExtra, SPEED_OF_LIGHT } from '../model/index.ts';
 import { type Caution, Problem } from '../problem.ts';
 import { asciiText, commentLines, isSafeSubcircuitName } from './netlist-text.ts';
 
@@ -89,7 +89,7 @@ function header(input: NetlistInput): string[] {
   const { from, to } = model.band;
   const { fitted, unseen } = model.counts;
   const paragraphs = [
-    asciiText(input.title),
+    asciiText(input.title) || `loop "${asciiText(loop)}"`,
     `Series impedance of loop "${asciiText(loop)}" over a run of ${engineering(length, 'm')}, ` +
       'with skin and proximity effect, between a1 (go end) and b1 (return end).',
     `${parts(input)} in series, all values positive: passive at every frequency.`,
@@ -103,7 +103,7 @@ function header(input: NetlistInput): string[] {
     ...lumpedLines(input),
     '',
     'use:',
-    `  .include ${input.fileName === undefined ? 'NAME-OF-THIS-FILE' : asciiText(input.fileName)}`,
+    `  .include ${input.fileName === undefined ? 'NAME-OF-THIS-FILE' : quotedName(asciiText(input.fileName))}`,
     `  Xrun GO RETURN ${input.name}`,
     '',
     ...validityLines(input),
@@ -117,16 +117,29 @@ function header(input: NetlistInput): string[] {
 
 function lumpedLines({ extra }: NetlistInput): string[] {
   if (extra === undefined || (extra.resistance === 0 && extra.inductance === 0)) return [];
-  const values = `${engineering(extra.resistance, 'ohm')} (Rextra), ${engineering(extra.inductance, 'H')} (Lextra)`;
-  return [`Lumped parts on top of the run, exact: ${values}.`];
+  const values = [
+    ...(extra.resistance > 0 ? [`${engineering(extra.resistance, 'ohm')} (Rextra)`] : []),
+    ...(extra.inductance > 0 ? [`${engineering(extra.inductance, 'H')} (Lextra)`] : []),
+  ];
+  return [`Lumped parts on top of the run, exact: ${values.join(', ')}.`];
 }
 
-function validityLines({ model, extra }: NetlistInput): string[] {
+/** Simulators end a name at a space unless it is quoted. */
+function quotedName(name: string): string {
+  return /\s/.test(name) ? `"${name}"` : name;
+}
+
+/** [1] a run of this share of a wavelength is short */
+const SHORT_RUN = 1 / 20;
+
+function validityLines({ model, extra, length }: NetlistInput): string[] {
+  const wave = engineering(Number(((SHORT_RUN * SPEED_OF_LIGHT) / length).toPrecision(2)), 'Hz');
   const edge = engineering(Number((RISE_TIME_BANDWIDTH / model.band.to).toPrecision(2)), 's');
   return [
     'Valid within the fitted band. Below it only R at 0 Hz is exact; above it the circuit is an extrapolation: ' +
       `edges faster than about ${edge} reach beyond it. Quasi-static and without capacitance: the run must stay ` +
-      'short against the wavelength. Metals are linear, at the temperatures of the case.',
+      `short against the wavelength (in air it is a twentieth of one at ${wave}). ` +
+      'Metals are linear, at the temperatures of the case.',
     ...(model.resistanceDc === 0 && !(extra !== undefined && extra.resistance > 0)
       ? ['No resistance at 0 Hz: across an ideal voltage source it has no operating point; add a resistor.']
       : []),

@@ -200,6 +200,7 @@ describe('wrong calls', () => {
     [['table', 'pair.yaml', '--set', 'gap=1 mm', '--set', 'gap=2 mm'], 2, /^USAGE --set gives "gap" twice/],
     [['table', 'pair.yaml', '--gauge', 'AWG 12'], 2, /^USAGE --gauge describes a pair without a file/],
     [['table'], 2, /^USAGE no FILE/],
+    [['help', 'table'], 2, /^USAGE unknown command "help"; see rimflow --help/],
     [['table', '--gauge', 'AWG 12'], 2, /^USAGE --gauge without --spacing/],
     [['table', '--spacing', '4 mm'], 2, /^USAGE --spacing without a size/],
     [['table', '--gauge', 'AWG 99', '--spacing', '4 mm'], 2, /UNKNOWN_GAUGE/],
@@ -300,7 +301,12 @@ describe('list', () => {
   });
   it('has the sizes of ASTM B258: AWG 12 is 2.0525 mm, of 5.211 mohm/m at 20 °C (1/58 ohm mm2/m)', async () => {
     const { out } = await run(['list', 'wires', '--format', 'csv']);
-    expect(out).toContain('\r\nAWG 12,2.0525,3.3088,5.2108,ASTM B258\r\n');
+    const [, diameter, area, resistance] = /\r\nAWG 12,([\d.]+),([\d.]+),([\d.]+),ASTM B258\r\n/.exec(out)!;
+    // ASTM B258: d = 0.005 in * 92^((36 - 12)/39)
+    const d = 0.127 * 92 ** (24 / 39);
+    expect(Number(diameter)).toBeCloseTo(d, 6);
+    expect(Number(area)).toBeCloseTo((Math.PI / 4) * d * d, 6);
+    expect(Number(resistance)).toBeCloseTo(1e3 / (58 * (Math.PI / 4) * d * d), 6);
   });
 });
 

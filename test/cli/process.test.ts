@@ -7,6 +7,7 @@ import {
   mkdtempSync,
   readdirSync,
   readFileSync,
+  readlinkSync,
   rmSync,
   statSync,
   symlinkSync,
@@ -135,6 +136,19 @@ describe('--out', () => {
     expect(readFileSync(join(folder, 'old.csv'), 'utf8')).toBe('old');
     expect(leftovers()).toEqual([]);
   });
+  it('/dev/stdout is standard output, and what stands in its file before and behind stays', () => {
+    const { status, err } = shell(
+      '{ echo before; rimflow list materials --out /dev/stdout; echo behind; } > all.txt',
+    );
+    expect([status, err]).toEqual([0, '']);
+    expect(readFileSync(join(folder, 'all.txt'), 'utf8')).toMatch(/^before\n[\s\S]*copper[\s\S]*\nbehind\n$/);
+  });
+  it('onto a link to nothing: WRITE_FAILED, 74, the link stays', () => {
+    symlinkSync('gone.csv', join(folder, 'link-to-nothing.csv'));
+    const { status, err } = command(['table', 'pair.yaml', '--out', 'link-to-nothing.csv']);
+    expect([status, err.split(' ').slice(0, 2)]).toEqual([74, ['link-to-nothing.csv', 'WRITE_FAILED']]);
+    expect(readlinkSync(join(folder, 'link-to-nothing.csv'))).toBe('gone.csv');
+  });
   it('keeps the mode of a file and a link to it', () => {
     writeFileSync(join(folder, 'real.csv'), 'old', { mode: 0o640 });
     symlinkSync('real.csv', join(folder, 'link.csv'));
@@ -159,7 +173,7 @@ describe('files', () => {
     // a file of a terabyte with nothing in it: reading it whole would take minutes
     const { status, err } = shell('truncate -s 1T big.yaml && rimflow table big.yaml');
     expect(status).toBe(2);
-    expect(err).toMatch(/^big\.yaml TOO_LARGE 1099511\.6 MB than .*; the limit is 10 MB\n$/);
+    expect(err).toMatch(/^big\.yaml TOO_LARGE 1099511\.6 MB are more than .*; the limit is 10 MB\n$/);
   });
   it('that never end are refused: TOO_LARGE, 2', () => {
     const { status, err } = command(['table', '/dev/zero']);

@@ -30,6 +30,13 @@ describe('quickPair', () => {
     expect(c.wires[0]!.material).toBe('copper');
   });
 
+  it('takes a range of frequencies, both ends kept', async () => {
+    const c = await quickPair({ diameter: '1 mm', spacing: '3 mm', from: '50 Hz', to: '2 kHz' });
+    expect([c.frequencies[0], c.frequencies.at(-1)]).toEqual([50, 2000]);
+    // 10 a decade over 1.6 decades, and the end
+    expect(c.frequencies.length).toBe(18);
+  });
+
   it('takes the other keys of a wire', async () => {
     const c = await quickPair({
       diameter: '2*1 mm',
@@ -50,6 +57,8 @@ describe('quickPair', () => {
     [{ gauge: 'AWG 99', spacing: '4 mm' }, '--gauge UNKNOWN_GAUGE no wire size "AWG 99"'],
     [{ gauge: 'AWG 12', spacing: '4' }, '--spacing UNIT at[0]: "4" has no unit'],
     [{ gauge: 'AWG 12', spacing: '1 mm' }, '--spacing OVERLAP wires "go" and "return" are 1 mm apart'],
+    [{ gauge: 'AWG 12', spacing: '4 mm', to: '1 Hz' }, '--from RANGE from is above to'],
+    [{ gauge: 'AWG 12', spacing: '4 mm', to: '1 m' }, '--to UNIT'],
     [{ diameter: '0 mm', spacing: '1 mm' }, '--diameter RANGE diameter: "0 mm" is outside'],
     [
       { gauge: 'AWG 12', material: 'coper', spacing: '4 mm' },

@@ -122,6 +122,8 @@ describe('the header', () => {
     ]) {
       expect(text).toContain(part);
     }
+    // c/(20 * 12 m)
+    expect(text.replaceAll('\n* ', ' ')).toContain('in air it is a twentieth of one at 1.2 MHz');
     for (const [quantity, exact] of [
       ['R', model.errors.resistance],
       ['L', model.errors.inductance],
@@ -132,6 +134,19 @@ describe('the header', () => {
       expect(stated / 100).toBeGreaterThanOrEqual(exact * (1 - 1e-12));
       expect(stated / 100).toBeLessThan(1.01 * exact);
     }
+  });
+
+  test('quotes a file name with spaces, names a loop without title, and only the lumped parts there are', () => {
+    const text = netlistText({
+      ...input,
+      title: '',
+      fileName: '12 volt.cir',
+      extra: { resistance: 0.25, inductance: 0 },
+    });
+    expect(text.startsWith('* loop "supply"\n')).toBe(true);
+    expect(text).toContain('\n*   .include "12 volt.cir"\n');
+    expect(text).toContain('exact: 250 mohm (Rextra).');
+    expect(text).not.toContain('Lextra');
   });
 
   test('lists cautions with the frequency from which they hold', () => {
