@@ -54,6 +54,9 @@ export interface Layout {
 /** Largest number of entries in all translation tables together (doubles): 800 MB. */
 export const MAX_TABLE_ENTRIES = 1e8;
 
+/** Largest number of modes times bodies: phases and fields of currents take 32 bytes of each, 1.6 GB. */
+const MAX_MODES_TIMES_BODIES = 5e7;
+
 /** [1] decay rates of all bodies; Infinity for a body alone. */
 export function decayRates(circles: readonly Circle[]): Float64Array {
   const alpha = new Float64Array(circles.length).fill(Number.POSITIVE_INFINITY);
@@ -86,6 +89,14 @@ export function prepareLayout(circles: readonly Circle[], orders: Int32Array, al
   const offsets = new Int32Array(count + 1);
   for (let i = 0; i < count; i++) offsets[i + 1] = offsets[i] + orders[i];
   const modes = offsets[count];
+  if (modes * count > MAX_MODES_TIMES_BODIES) {
+    throw new Problem(
+      'NOT_REACHED',
+      `${count} wires with orders up to ${Math.max(...orders)} need ${(32e-9 * modes * count).toFixed(1)} GB for their ` +
+        `geometry; the limit is ${32e-9 * MAX_MODES_TIMES_BODIES} GB: draw fewer wires, widen the smallest gaps or allow a ` +
+        'larger tolerance',
+    );
+  }
   const monopoleRe = new Float64Array(modes * count);
   const monopoleIm = new Float64Array(modes * count);
   const logarithms = new Float64Array(count * count);
