@@ -144,6 +144,21 @@ describe('symmetry that leaves most orders empty does not hide the truncation', 
   });
 });
 
+describe('circuits that can not be are refused by the solver itself', () => {
+  const wires = [0, 1, 2, 3].map((i) => wire(4e-3 * i, 0, 1e-3));
+  it.each([
+    ['BOTH_SIDES', [loop([0, 1], [1])], {}],
+    ['EMPTY_LOOP', [loop([], [1])], {}],
+    ['EMPTY_LOOP', [], {}],
+    ['EMPTY_LOOP', [loop([0, 1], [2], { series: true })], {}],
+    ['GROUP_CONFLICT', [loop([0], [1, 2]), loop([0], [2])], {}],
+    ['GROUP_CONFLICT', [loop([0], [1])], { bonded: [[1, 2]] }],
+  ] as const)('%s', (code, loops, more) => {
+    const c = caseOf(wires, [...loops], 'bonded' in more ? { bonded: more.bonded } : {});
+    expect(() => prepareCase(c, 50)).toThrow(expect.objectContaining({ code }));
+  });
+});
+
 it('wires that touch or overlap are refused by the solver itself: OVERLAP', () => {
   for (const d of [2e-3, 1.5e-3]) {
     const c = caseOf([wire(0, 0, 1e-3), wire(d, 0, 1e-3)], [loop([0], [1])]);

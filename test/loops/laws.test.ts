@@ -277,6 +277,28 @@ describe('limits', () => {
     expect(COPPER).toBe(58e6);
   });
 
+  it('a tolerance of 1e-11 is reached: the iteration goes on as far as that asks for', () => {
+    for (const f of [1e3, 1e6]) {
+      const z = solve(
+        caseOf([wire(0, 0, 1e-3), wire(2.01e-3, 0, 1e-3), wire(0, 2.05e-3, 1e-3)], [loop([0], [1])], {
+          tolerance: 1e-11,
+        }),
+        f,
+      );
+      expect(z.reached).toBe(true);
+      expect(Math.max(z.resistanceError[0], z.inductanceError[0])).toBeLessThanOrEqual(1e-11);
+    }
+  });
+
+  it('R alone beyond the tolerance is not reached', () => {
+    // at 1 THz R is a small part of Z, and its rounding so much larger
+    const wires = [wire(0, 0, 0.5e-3), wire(1.001e-3, 0, 0.5e-3)];
+    const z = solve(caseOf(wires, [loop([0], [1])], { tolerance: 1e-12 }), 1e12);
+    expect(z.inductanceError[0]).toBeLessThan(1e-12);
+    expect(z.resistanceError[0]).toBeGreaterThan(1e-12);
+    expect(z.reached).toBe(false);
+  });
+
   it('a tolerance below rounding is not claimed', () => {
     const z = solve(
       caseOf([wire(0, 0, 1e-3), wire(2.1e-3, 0, 1e-3)], [loop([0], [1])], { tolerance: 1e-17 }),
