@@ -50,14 +50,15 @@ it(`rounding: the wires in another order differ by no more than both state, seed
   expect(worst).toBeLessThan(1);
 });
 
-const WILD_SEED = 1;
-const WILD = 100;
-
-it(`holds over ${WILD} wild layouts at tolerances from 1e-2 to 1e-10, mutual terms too, seed ${WILD_SEED}`, () => {
-  const random = seeded(WILD_SEED);
+it.each([
+  { seed: 1, layouts: 100 },
+  // few, of errors below the last digit of L
+  { seed: 10, layouts: 30 },
+])('holds over wild layouts at tolerances from 1e-2 to 1e-10, mutual terms too: %o', ({ seed, layouts }) => {
+  const random = seeded(seed);
   const worst = { own: 0, mutual: 0 };
   let mutual = 0;
-  for (let k = 0; k < WILD; k++) {
+  for (let k = 0; k < layouts; k++) {
     const { case: c, frequency } = wildLayout(random, [1e-2, 1e-3, 1e-5, 1e-8, 1e-10][k % 5]);
     const z = impedanceAt(prepareCase(c, frequency), frequency);
     const y = impedanceAt(prepareCase({ ...c, tolerance: 1e-12 }, frequency), frequency);
@@ -80,9 +81,9 @@ it(`holds over ${WILD} wild layouts at tolerances from 1e-2 to 1e-10, mutual ter
     mutual++;
   }
   console.log(
-    `seed ${WILD_SEED}: worst over stated ${worst.own.toPrecision(2)}, mutual ${worst.mutual.toPrecision(2)}`,
+    `seed ${seed}: worst over stated ${worst.own.toPrecision(2)}, mutual ${worst.mutual.toPrecision(2)}`,
   );
-  expect(mutual).toBeGreaterThan(30);
+  expect(mutual).toBeGreaterThan(layouts / 4);
   expect(worst.mutual).toBeLessThanOrEqual(1);
   expect(worst.mutual).toBeGreaterThan(0);
 });
