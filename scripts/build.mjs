@@ -34,7 +34,7 @@ function origin() {
     'package.json',
     'package-lock.json',
     'tsconfig.json',
-    'tsconfig.build.json',
+    'scripts/tsconfig.build.json',
     'scripts/build.mjs',
   ];
   for (const file of [...sources.sort(), ...others.map((name) => join(root, name))]) {
@@ -101,7 +101,7 @@ if (!(process.argv.includes('--if-stale') && isFresh(madeOf))) {
     mkdirSync(beside, { recursive: true });
     const tsc = createRequire(import.meta.url).resolve('typescript/bin/tsc');
     // types are checked by scripts/check; a build only turns them into declarations
-    const options = ['-p', join(root, 'tsconfig.build.json'), '--outDir', beside, '--noCheck'];
+    const options = ['-p', join(root, 'scripts/tsconfig.build.json'), '--outDir', beside, '--noCheck'];
     execFileSync(process.execPath, [tsc, ...options], { stdio: 'inherit' });
     copyFileSync(join(root, 'src/input/case.schema.json'), join(beside, 'input/case.schema.json'));
     await bundleCommand(beside);

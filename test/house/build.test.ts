@@ -22,7 +22,7 @@ const root = fileURLToPath(new URL('../..', import.meta.url));
 let tree: string;
 beforeAll(() => {
   tree = mkdtempSync(join(tmpdir(), 'rimflow-build-'));
-  for (const name of ['package.json', 'package-lock.json', 'tsconfig.json', 'tsconfig.build.json']) {
+  for (const name of ['package.json', 'package-lock.json', 'tsconfig.json']) {
     copyFileSync(join(root, name), join(tree, name));
   }
   for (const name of ['src', 'scripts']) cpSync(join(root, name), join(tree, name), { recursive: true });
