@@ -9,8 +9,8 @@ import { Problem } from '../problem.ts';
 import type { FrequencyTable, SweepOptions } from '../sweep/index.ts';
 import type { WorkerMessage } from './solve-worker.ts';
 
-/** [1] wires up to which one frequency takes a fraction of a second, at the smallest gaps too */
-const SMALL_CASE = 12;
+/** [1] wires up to which one frequency takes a fraction of a second, at the smallest gaps and radii 100:1 too */
+const SMALL_CASE = 4;
 
 export async function solveOnNode(c: Case, options: SweepOptions): Promise<FrequencyTable> {
   if (c.wires.length > SMALL_CASE) return solveInThread(c, options);
