@@ -18,7 +18,7 @@ it('the square of each root is the reflection of its own wire and order', () => 
     wire(6, 0, 1e-3, { conductivity: Number.POSITIVE_INFINITY }),
     wire(7, 0, 1e-3, steel),
   ];
-  const active = activeModes(Int32Array.of(6, 12, 3, 3, 5, 7, 4, 9));
+  const active = activeModes(Int32Array.of(6, 12, 3, 3, 5, 2, 3, 9));
   for (const omega of [10, 3e4, 1e7, 1e11]) {
     const { re, im } = reflectionRoots(wires, omega, active);
     wires.forEach((w, b) => {
