@@ -69,6 +69,15 @@ describe(`complex systems, seed ${SEED}`, () => {
     }
   });
 
+  it('LU swaps rows: zero and tiny pivots cost no digits', () => {
+    for (const corner of [0, 1e-20]) {
+      // [corner 1; 1 1] x = [1; 2]: x = [1; 1] but for the corner
+      const x = new Float64Array([1, 0, 2, 0]);
+      solveLu(factoriseLu(new Float64Array([corner, 0, 1, 0, 1, 0, 1, 0]), 2), x);
+      expect([...x]).toEqual([1, 0, 1, 0]);
+    }
+  });
+
   it('refuses a singular matrix with its size', () => {
     const a = new Float64Array([1, 0, 2, 0, 2, 0, 4, 0]);
     expect(() => factoriseLu(a, 2)).toThrow(/order 2 is singular/);

@@ -299,6 +299,13 @@ describe('limits', () => {
     expect(z.reached).toBe(false);
   });
 
+  it('L alone beyond the tolerance is not reached', () => {
+    const perfect = { conductivity: Number.POSITIVE_INFINITY };
+    const c = caseOf([wire(0, 0, 1e-3, perfect), wire(2.1e-3, 0, 1e-3, perfect)], [loop([0], [1])]);
+    expect(solve({ ...c, tolerance: 1e-17 }, 1e6).reached).toBe(false);
+    expect(solve(c, 1e6).reached).toBe(true);
+  });
+
   it('a tolerance below rounding is not claimed', () => {
     const z = solve(
       caseOf([wire(0, 0, 1e-3), wire(2.1e-3, 0, 1e-3)], [loop([0], [1])], { tolerance: 1e-17 }),
