@@ -5,7 +5,7 @@
 import { readFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import { impedanceAt, prepareCase } from '../../src/loops/index.ts';
-import type { Case } from '../../src/model/index.ts';
+import { type Case, conductivityAt, findMetal, type Metal } from '../../src/model/index.ts';
 import { COPPER, caseOf, loop, wire } from './case-builder.ts';
 
 interface Value {
@@ -250,4 +250,30 @@ describe('many wires', () => {
       Math.max(lastDigit(v.printed), 0.002 * v.value),
     );
   });
+
+  const aluminium = group('aac-1350-conductors').values;
+  it.each(aluminium.filter((v) => 'GMR_ft' in v.inputs))('all-aluminium reactance at 1 ft, $inputs', (v) => {
+    // a tube of no thickness and the radius of the printed GMR has its own L: a perfect wire, far enough from a like one
+    const gmr = (v.inputs.GMR_ft as number) * FOOT;
+    const perfect = { conductivity: Number.POSITIVE_INFINITY };
+    const { L } = pair(gmr, FOOT, 60, perfect);
+    const reactance = (2 * Math.PI * 60 * L * MILE) / 2;
+    // the handbook takes ln(D/GMR), the acosh of the solution differs by (GMR/D)^2; GMR is printed with three digits
+    expect(Math.abs(reactance - v.value)).toBeLessThanOrEqual(lastDigit(v.printed));
+  });
+
+  it.each(aluminium.filter((v) => v.inputs.f_Hz === 60 && 'T_C' in v.inputs))(
+    'all-aluminium resistance, warm at 60 Hz, $inputs',
+    (v) => {
+      const { kcmil, T_C } = v.inputs as Record<string, number>;
+      const area = kcmil * 1000 * (Math.PI / 4) * 25.4e-6 ** 2;
+      // seven strands, the outer radius three of theirs; 2 % longer by their lay; alone, the return far away
+      const radius = 3 * Math.sqrt(area / 7 / Math.PI);
+      const metal = conductivityAt(findMetal('aluminium') as Metal, T_C);
+      const conductivity = (metal / 1.02) * (area / (Math.PI * radius * radius));
+      const R = (pair(radius, 10, 60, { conductivity }).R / 2) * MILE;
+      // 0.2 % is what the conductivity of the handbook (61.2 % IACS) and its rounding leave, or its last digit
+      expect(Math.abs(R - v.value)).toBeLessThanOrEqual(Math.max(lastDigit(v.printed), 0.002 * v.value));
+    },
+  );
 });
